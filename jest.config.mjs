@@ -1,0 +1,2 @@
+/** Three Jest projects: shared (pure), backend (on a throwaway PostgreSQL), frontend (jsdom, zoneless). */
+export default { projects: ['<rootDir>/shared', '<rootDir>/backend', '<rootDir>/frontend'] };
