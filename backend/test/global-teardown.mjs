@@ -1,0 +1,4 @@
+/** Stops and removes the throwaway PostgreSQL of the test run. */
+export default async function tearDown() {
+  await globalThis.deltaproofTestCluster?.stop();
+}
