@@ -3,7 +3,7 @@ import type { MigrationStep, NamedMigration } from '../named-migration';
 const up = `
 CREATE TABLE studies (
   id uuid PRIMARY KEY DEFAULT gen_random_uuid(),
-  key text NOT NULL UNIQUE CHECK (key ~ '^[a-z0-9][a-z0-9-]{0,62}$'),
+  key text NOT NULL UNIQUE CHECK (key ~ '^[A-Za-z0-9][A-Za-z0-9-]{0,62}$'),
   name text NOT NULL CHECK (length(name) BETWEEN 1 AND 200),
   revision bigint NOT NULL DEFAULT 0 CHECK (revision >= 0),
   ledger_head text,
