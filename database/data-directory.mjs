@@ -15,7 +15,6 @@ const reachableRoot = '/var/lib/deltaproof';
  * @property {string} clusterHome directory that holds the PostgreSQL cluster and its log
  * @property {boolean} clusterElsewhere whether `clusterHome` had to be put outside the data directory
  * @property {string} passwordFile
- * @property {string} secretsFile the server's own secrets, made by the server on its first start
  * @property {string} runningFile says which process holds the directory
  */
 
@@ -47,7 +46,6 @@ export function openDataDirectory(directory) {
     clusterHome: clusterElsewhere ? join(reachableRoot, name) : join(path, 'postgres'),
     clusterElsewhere,
     passwordFile: join(path, 'database-password'),
-    secretsFile: join(path, 'secrets.json'),
     runningFile: join(path, 'running.json'),
   };
 }

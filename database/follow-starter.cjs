@@ -1,0 +1,2 @@
+/** Loaded into the server: ends it properly when its starter has died without a word, so that no server is left behind. */
+process.once('disconnect', () => process.kill(process.pid, 'SIGTERM'));
