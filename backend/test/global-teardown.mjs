@@ -1,4 +1,4 @@
-/** Stops and removes the throwaway PostgreSQL of the test run. */
-export default async function tearDown() {
-  await globalThis.deltaproofTestCluster?.stop();
-}
+import { stopTestCluster } from './test-cluster.mjs';
+
+/** Jest global tear-down of the backend. */
+export default stopTestCluster;
