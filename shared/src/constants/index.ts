@@ -1,0 +1,1 @@
+export { CONSTANTS, CONSTANTS_VERSION, constantById, type Constant } from './constants';
