@@ -1,0 +1,15 @@
+import { ANNIHILATION_CHECKS } from './annihilation';
+import type { Check } from './check';
+import { JET_CHECKS } from './jets';
+import { MASS_CHECKS } from './masses';
+import { RADIATOR_CHECKS } from './radiators';
+import { ROCKET_CHECKS } from './rockets';
+
+/** Every reference value that the tests of this build compare with the library. */
+export const METHOD_CHECKS: readonly Check[] = [
+  ...ROCKET_CHECKS,
+  ...JET_CHECKS,
+  ...RADIATOR_CHECKS,
+  ...ANNIHILATION_CHECKS,
+  ...MASS_CHECKS,
+];

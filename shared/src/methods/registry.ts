@@ -1,0 +1,96 @@
+import { annihilationEnergy, annihilationPower } from './annihilation/annihilation-energy';
+import { gammaShield, gammaTransmission, mixtureAttenuation } from './annihilation/gamma-attenuation';
+import { shieldHeating } from './annihilation/shield-heating';
+import { electricAcceleration, startAcceleration } from './jet/acceleration';
+import { electricThrust, electricThrustExhaustSpeed, electricThrustingTime } from './jet/electric-thrust';
+import { jetPower, massFlowThrust, photonThrust, relativisticJetPower } from './jet/jet-power';
+import { specificPower } from './jet/specific-power';
+import { massMargins, massRollUp } from './mass/mass-roll-up';
+import { dustImpact, interstellarHeating } from './medium/gas-heating';
+import { radiatorConvexEnvelope } from './radiator/convex-envelope';
+import { cylinderEnvelopeArea, radialFinEnvelope } from './radiator/cylinder-envelope';
+import { radiatorHeatRejection } from './radiator/heat-rejection';
+import { impliedEfficiency } from './radiator/implied-efficiency';
+import { radiatorSizing } from './radiator/sizing';
+import {
+  fourthRootTemperature,
+  plateFacingStar,
+  steadySurfaceTemperature,
+  surfaceFluxRatio,
+} from './radiator/surface-temperature';
+import {
+  relativisticMassRatio,
+  relativisticPropellant,
+  relativisticRocketSpeed,
+} from './relativistic/relativistic-rocket';
+import { propellantForDeltaV, propellantForDeltaVExhaustSpeed } from './rocket/propellant-for-delta-v';
+import { propellantLoad } from './rocket/propellant-load';
+import { rocketEquation, rocketEquationExhaustSpeed } from './rocket/rocket-equation';
+import { specificImpulse } from './rocket/specific-impulse';
+import type { Method } from './types';
+
+/** Every version of every method, by family. */
+export const METHODS: readonly Method[] = [
+  propellantForDeltaV,
+  propellantForDeltaVExhaustSpeed,
+  propellantLoad,
+  rocketEquation,
+  rocketEquationExhaustSpeed,
+  specificImpulse,
+  relativisticMassRatio,
+  relativisticPropellant,
+  relativisticRocketSpeed,
+  startAcceleration,
+  electricAcceleration,
+  electricThrust,
+  electricThrustExhaustSpeed,
+  electricThrustingTime,
+  jetPower,
+  relativisticJetPower,
+  photonThrust,
+  massFlowThrust,
+  specificPower,
+  radiatorConvexEnvelope,
+  cylinderEnvelopeArea,
+  radialFinEnvelope,
+  radiatorHeatRejection,
+  impliedEfficiency,
+  radiatorSizing,
+  fourthRootTemperature,
+  surfaceFluxRatio,
+  steadySurfaceTemperature,
+  plateFacingStar,
+  annihilationEnergy,
+  annihilationPower,
+  gammaTransmission,
+  gammaShield,
+  mixtureAttenuation,
+  shieldHeating,
+  interstellarHeating,
+  dustImpact,
+  massRollUp,
+  massMargins,
+];
+
+/** The method with this id: the version asked for, or the newest. */
+export function methodById(id: string, version?: string): Method | undefined {
+  const wanted = version ?? newestVersion(id);
+  return METHODS.find((method) => method.id === id && method.version === wanted);
+}
+
+/** The newest version of the method with this id. */
+export function newestVersion(id: string): string | undefined {
+  return METHODS.filter((method) => method.id === id)
+    .map((method) => method.version)
+    .sort(compareVersions)
+    .at(-1);
+}
+
+function compareVersions(a: string, b: string): number {
+  const [left, right] = [a, b].map((version) => version.split('.').map(Number));
+  for (let index = 0; index < 3; index += 1) {
+    const difference = (left?.[index] ?? 0) - (right?.[index] ?? 0);
+    if (difference !== 0) return difference;
+  }
+  return 0;
+}

@@ -1,0 +1,53 @@
+import { METHOD_CHECKS } from '../checks';
+import { parseUnit, toSi } from '@shared/units';
+import type { Given } from '../checks/check';
+
+function si(given: Given): number {
+  if (typeof given === 'number') return given;
+  const unit = parseUnit(given[1]);
+  if (!unit.ok) throw new Error(unit.message);
+  return toSi(given[0], unit.unit);
+}
+
+const YEAR = 31_557_600;
+const LIGHT = 299_792_458;
+const LEAD = { mu_rho: 0.007102, rho: 11350 };
+
+/** Inputs of methods that no published check exercises, in SI. */
+const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
+  'rocket-equation': [{ I_sp: 6500, m_0: 120e3, m_p: 55e3 }],
+  'propellant-for-delta-v': [{ dv: 38000, I_sp: 6500, m_f: 65e3 }],
+  'propellant-load': [{ m_p: 55e3, f_r: 0.01, f_v: 0.02, f_b: 0 }],
+  'relativistic-propellant': [
+    { w: 0.35 * LIGHT, v: 0.3 * LIGHT, m_f: 100e3 },
+    { w: LIGHT, v: 0.9 * LIGHT, m_f: 100e3, n: 2 },
+  ],
+  'electric-thrust': [{ P: 1e6, eta: 0.68, I_sp: 6500 }],
+  'electric-thrust-exhaust-speed': [{ P: 1e6, eta: 0.68, v_e: 63743 }],
+  'electric-thrusting-time': [{ P: 1e6, eta: 0.68, I_sp: 6500, m_p: 55e3 }],
+  'relativistic-jet-power': [{ F: 1e5, v_e: 0.6 * LIGHT }],
+  'specific-power': [{ P: 1e6, m: 20e3 }],
+  'start-acceleration': [{ F: 21.3, m: 120e3 }],
+  'radiator-heat-rejection': [{ A: 139, eps: 0.88, T_r: 812, T_s: 200, eta_f: 0.95 }],
+  'radiator-convex-envelope': [{ A_f: 1, A_c: 4, eps: 0.9, T_r: 800, T_s: 100 }],
+  'implied-efficiency': [{ P: 7.7e11, Q: 9.74e9 }],
+  'annihilation-power': [{ m: 142e3, t: 2 * YEAR, f_g: 0.38, f_abs: 0.01 }],
+  'gamma-transmission': [{ ...LEAD, x: 0.05, B: 2 }],
+  'gamma-shield': [{ ...LEAD, K: 1e4, A: 12, B: 3 }],
+  'mixture-attenuation': [{ rho: 3000, w_1: 0.6, mu_rho_1: 0.0071, w_2: 0.4, mu_rho_2: 0.0063 }],
+  'interstellar-heating': [{ v: 0.3 * LIGHT, n: 2e5, f_d: 0.01, eps: 0.8 }],
+  'dust-impact': [{ v: 0.3 * LIGHT, d: 1e-6, rho: 2500, n_d: 1e-6, A: 700 }],
+};
+
+function collect(): Record<string, Readonly<Record<string, number>>[]> {
+  const examples: Record<string, Readonly<Record<string, number>>[]> = {};
+  for (const [method, given] of Object.entries(OWN)) examples[method] = [...given];
+  for (const check of METHOD_CHECKS) {
+    const inputs = Object.fromEntries(Object.entries(check.inputs).map(([name, given]) => [name, si(given)]));
+    (examples[check.method] ??= []).push(inputs);
+  }
+  return examples;
+}
+
+/** Inputs for each method, in SI, by which its proof lines are compared with its computation. */
+export const EXAMPLES: Readonly<Record<string, readonly Readonly<Record<string, number>>[]>> = collect();
