@@ -160,3 +160,8 @@ export function siUnitOf(d: Dimension): string {
 export function unitSymbolsOf(d: Dimension): readonly string[] {
   return named.get(d)?.symbols ?? [siUnitOf(d)];
 }
+
+/** Every dimension that has a name. */
+export function namedDimensions(): readonly Dimension[] {
+  return [...named.keys()];
+}

@@ -18,6 +18,9 @@ const TEN_POWER = `10(?:\\^\\(?(?:\\+|${MINUS})?\\d+\\)?|${SUPER})`;
 const E_POWER = `[eE](?:\\+|${MINUS})?\\d+`;
 const SIGN = `(?:\\+|${MINUS})?`;
 
+/** Longer texts are no value that a person types; the cap keeps messages short. */
+const LONGEST_TEXT = 200;
+
 /** 1.2e3, 1.2×10^3, 1.2 · 10³, 10^-9; the power of ten alone has mantissa 1. */
 const NUMBER = new RegExp(
   `^(?<sign>${SIGN})\\s*(?:(?<ten>${TEN_POWER})|(?<mantissa>${MANTISSA})(?:(?<e>${E_POWER})|\\s*[×x*·⋅]\\s*(?<times>${TEN_POWER}))?)`,
@@ -47,6 +50,9 @@ function commaMessage(input: string): string {
  */
 export function readNumber(input: string): NumberTextResult {
   const source = input.trim();
+  if (source.length > LONGEST_TEXT) {
+    return { ok: false, code: 'not-a-number', message: `A value of more than ${LONGEST_TEXT} characters is refused.` };
+  }
   if (COMMA.test(source)) return { ok: false, code: 'not-a-number', message: commaMessage(source) };
   const match = NUMBER.exec(source);
   const rest = match ? source.slice(match[0].length) : source;
@@ -62,7 +68,9 @@ export function readNumber(input: string): NumberTextResult {
   const digits = mantissa.replace(/\s/gu, '');
   const value =
     Number(`${digits}${power === undefined ? '' : `e${exponentDigits(power)}`}`) *
-    (/^(?:-|\u2212|\u2013)/u.test(sign) ? -1 : 1);
+      (/^(?:-|\u2212|\u2013)/u.test(sign) ? -1 : 1) +
+    // Turns -0 into 0: a typed zero has no sign.
+    0;
   const text = match[0].trim();
   const range = rangeProblem(text, value, /[1-9]/u.test(digits));
   return range ?? { ok: true, text, rest: rest.trim(), value };

@@ -10,7 +10,9 @@ export function prettyUnit(unit: string): string {
   if (text === '1') return '';
   return text
     .replace(/\^(-?\d+)(?![\d.])/g, (_, exponent: string) => superscript(rational(Number(exponent))))
-    .replace(/(?<=\p{L})(?<!g)(-?\d+)/gu, (_, exponent: string) => superscript(rational(Number(exponent))))
+    .replace(/(?<=\p{L})(?!(?<=(?<!\p{L})g)0(?!\d))(-?\d+)/gu, (_, exponent: string) =>
+      superscript(rational(Number(exponent))),
+    )
     .replace(/\s*[*·⋅]\s*/g, '·')
     .replace(/degC\b/g, '°C')
     .replace(/(?<!\p{L})([um]?|[kM])ohm\b/gu, '$1Ω')

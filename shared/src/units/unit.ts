@@ -31,6 +31,7 @@ const ONE: Omit<Unit, 'symbol'> = {
 
 /** Parsed texts are kept; the store is emptied when full, since people can type any number of different texts. */
 const LARGEST_STORE = 4000;
+const LONGEST_STORED = 200;
 const store = new Map<string, UnitResult>();
 
 /**
@@ -41,6 +42,7 @@ export function parseUnit(text: string): UnitResult {
   const known = store.get(text);
   if (known) return known;
   const result = Object.freeze(readUnit(text.trim()));
+  if (text.length > LONGEST_STORED) return result;
   if (store.size >= LARGEST_STORE) store.clear();
   store.set(text, result);
   return result;
