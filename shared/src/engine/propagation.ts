@@ -1,0 +1,249 @@
+import { evaluateTree, type Failure } from '@shared/formula';
+import type { CheckTable } from './checks';
+import { DirtySet } from './dirty-set';
+import type { ComputeFunction, FormulaSpec } from './model';
+import { run } from './tape';
+
+/** What a rank is: an input, a formula, the first output of a function (which computes all), or a further output. */
+export const enum Kind {
+  Input,
+  Formula,
+  Function,
+  FurtherOutput,
+}
+
+/** A function with what failure messages call it. */
+export interface FunctionNode {
+  readonly id: string;
+  readonly label: string;
+  readonly outputs: number;
+  readonly compute: ComputeFunction;
+}
+
+/** The compiled model. Ranks are topological: a node only reads nodes of lower rank. */
+export interface Program {
+  readonly ids: readonly string[];
+  readonly kinds: Uint8Array;
+  readonly code: Int32Array;
+  /** First instruction of each rank; one more entry than nodes. */
+  readonly codeStarts: Int32Array;
+  /** Ranks that each rank reads, in reading order. */
+  readonly readStarts: Int32Array;
+  readonly reads: Int32Array;
+  /** Ranks to be computed again after each rank changes. */
+  readonly dependantStarts: Int32Array;
+  readonly dependants: Int32Array;
+  readonly formulas: ReadonlyMap<number, FormulaSpec>;
+  readonly functions: ReadonlyMap<number, FunctionNode>;
+  readonly inputLabels: ReadonlyMap<number, string>;
+}
+
+/** How long the logs were at some moment. */
+export interface Mark {
+  readonly values: number;
+  readonly failures: number;
+  readonly turns: number;
+}
+
+/**
+ * Holds the values and carries changes through the tape. NaN in the value array stands for a failure, whose reason is
+ * kept beside it. Every overwritten value is logged, so that a change can be taken back to the last bit.
+ */
+export class Propagation {
+  private readonly dirty: DirtySet;
+  private readonly failures = new Map<number, Failure>();
+  private readonly logRanks: number[] = [];
+  private readonly logValues: number[] = [];
+  private readonly failureLog: { readonly rank: number; readonly before: Failure | undefined }[] = [];
+
+  constructor(
+    private readonly program: Program,
+    readonly values: Float64Array,
+    private readonly checks: CheckTable,
+  ) {
+    this.dirty = new DirtySet(program.ids.length);
+  }
+
+  /** Why a rank has no value; undefined when it has one. */
+  failure(rank: number): Failure | undefined {
+    return this.failures.get(rank);
+  }
+
+  /** Writes an input (NaN: no value) and marks what follows from it. */
+  write(rank: number, value: number): void {
+    const missing = value !== value;
+    const label = this.program.inputLabels.get(rank) ?? '';
+    const failure = missing
+      ? { code: 'missing' as const, message: `${label} has no value`, origin: this.program.ids[rank] ?? '' }
+      : undefined;
+    this.store(rank, value, failure);
+  }
+
+  /** Recomputes everything marked, in the order of ranks. */
+  propagate(): void {
+    const { dirty } = this;
+    const { kinds, code, codeStarts } = this.program;
+    const { values } = this;
+    for (let rank = dirty.takeFrom(0); rank >= 0; rank = dirty.takeFrom(rank)) {
+      if (kinds[rank] === Kind.Function) {
+        this.runFunction(rank);
+        continue;
+      }
+      const before = values[rank] as number;
+      run(code, values, codeStarts[rank] as number, codeStarts[rank + 1] as number);
+      const after = values[rank] as number;
+      if (after - after !== 0 || before !== before) {
+        values[rank] = before;
+        this.storeFormula(rank, after);
+      } else if (!Object.is(after, before)) {
+        this.changed(rank, before, after);
+      }
+    }
+  }
+
+  /** Computes every formula and function from the inputs, leaving nothing in the log. */
+  recompute(): void {
+    const { kinds, code, codeStarts } = this.program;
+    const { values } = this;
+    const mark = this.logRanks.length;
+    for (let rank = 0; rank < kinds.length; rank++) {
+      if (kinds[rank] === Kind.Formula) {
+        const before = values[rank] as number;
+        run(code, values, codeStarts[rank] as number, codeStarts[rank + 1] as number);
+        const after = values[rank] as number;
+        if (after - after !== 0 || before !== before) {
+          values[rank] = before;
+          this.storeFormula(rank, after);
+        }
+      } else if (kinds[rank] === Kind.Function) this.runFunction(rank);
+      this.checks.update(rank, values[rank] as number);
+    }
+    // Everything has been visited: what was marked on the way is done.
+    this.dirty.words.fill(0);
+    this.dirty.summary.fill(0);
+    this.forget(mark, 0);
+  }
+
+  /** A place in the log to come back to. */
+  mark(): Mark {
+    return { values: this.logRanks.length, failures: this.failureLog.length, turns: this.checks.turns };
+  }
+
+  /** Ids that changed since the mark: the inputs written, then what follows from them in the order of ranks. */
+  changedSince(mark: Mark): string[] {
+    const { ids } = this.program;
+    const changed: string[] = [];
+    for (let i = mark.values; i < this.logRanks.length; i++) changed.push(ids[this.logRanks[i] as number] as string);
+    return changed;
+  }
+
+  /** Keeps what changed since the mark and drops the log of it. */
+  keep(mark: Mark): void {
+    this.forget(mark.values, mark.failures);
+  }
+
+  /** Takes back what changed since the mark. */
+  rollBack(mark: Mark): void {
+    const { logRanks, logValues, values, checks } = this;
+    for (let i = this.failureLog.length - 1; i >= mark.failures; i--) {
+      const entry = this.failureLog[i];
+      if (!entry) continue;
+      if (entry.before) this.failures.set(entry.rank, entry.before);
+      else this.failures.delete(entry.rank);
+    }
+    for (let i = logRanks.length - 1; i >= mark.values; i--) {
+      const rank = logRanks[i] as number;
+      values[rank] = logValues[i] as number;
+      checks.update(rank, values[rank]);
+    }
+    checks.forgetSince(mark.turns);
+    this.forget(mark.values, mark.failures);
+  }
+
+  private forget(values: number, failures: number): void {
+    this.logRanks.length = values;
+    this.logValues.length = values;
+    this.failureLog.length = failures;
+  }
+
+  /** Notes a new value: log, what depends on it, its checks. */
+  private changed(rank: number, before: number, after: number): void {
+    const { dependantStarts, dependants } = this.program;
+    this.logRanks.push(rank);
+    this.logValues.push(before);
+    this.values[rank] = after;
+    const end = dependantStarts[rank + 1] as number;
+    for (let i = dependantStarts[rank] as number; i < end; i++) this.dirty.add(dependants[i] as number);
+    this.checks.update(rank, after);
+  }
+
+  /** Stores a value or failure if it differs from what stands; a failure for another reason counts as different. */
+  private store(rank: number, value: number, failure: Failure | undefined): void {
+    const before = this.values[rank] as number;
+    const known = this.failures.get(rank);
+    if (Object.is(before, value) && sameFailure(known, failure)) return;
+    if (known || failure) {
+      this.failureLog.push({ rank, before: known });
+      if (failure) this.failures.set(rank, failure);
+      else this.failures.delete(rank);
+    }
+    this.changed(rank, before, value);
+  }
+
+  /** The slow way, for formulas that fail or failed: the tree says why. */
+  private storeFormula(rank: number, computed: number): void {
+    const formula = this.program.formulas.get(rank);
+    if (!formula || Number.isFinite(computed)) {
+      this.store(rank, computed, undefined);
+      return;
+    }
+    const first = this.program.readStarts[rank] as number;
+    const read = (name: string): number | Failure => {
+      const source = this.program.reads[first + formula.formula.names.indexOf(name)] as number;
+      return this.failures.get(source) ?? (this.values[source] as number);
+    };
+    const where = { origin: formula.id, label: formula.label ?? formula.id };
+    const result = evaluateTree(formula.formula.root, read, where);
+    if (typeof result === 'number') this.store(rank, result, undefined);
+    else this.store(rank, NaN, result);
+  }
+
+  private runFunction(rank: number): void {
+    const node = this.program.functions.get(rank);
+    if (!node) return;
+    const { readStarts, reads } = this.program;
+    const inputs: number[] = [];
+    let failure: Failure | undefined;
+    for (let i = readStarts[rank] as number; i < (readStarts[rank + 1] as number) && !failure; i++) {
+      const source = reads[i] as number;
+      failure = this.failures.get(source);
+      inputs.push(this.values[source] as number);
+    }
+    const computed = failure ? { values: [], failure } : compute(node, inputs);
+    for (let k = 0; k < node.outputs; k++) this.store(rank + k, computed.values[k] ?? NaN, computed.failure);
+  }
+}
+
+/** Runs a library function; whatever goes wrong in it becomes a failure that names it. */
+function compute(node: FunctionNode, inputs: readonly number[]): { values: readonly number[]; failure?: Failure } {
+  const failed = (code: Failure['code'], message: string): { values: []; failure: Failure } => ({
+    values: [],
+    failure: { code, message: `${message} in ${node.label}`, origin: node.id },
+  });
+  let result: ReturnType<ComputeFunction>;
+  try {
+    result = node.compute(inputs);
+  } catch (error) {
+    return failed('refused', error instanceof Error ? error.message : 'an error');
+  }
+  if (!result.ok) return failed('refused', result.message);
+  const { values } = result;
+  if (values.length !== node.outputs) return failed('refused', `${values.length} results instead of ${node.outputs}`);
+  if (!values.every(Number.isFinite)) return failed('overflow', 'a result that is no finite number');
+  return { values };
+}
+
+function sameFailure(a: Failure | undefined, b: Failure | undefined): boolean {
+  if (a === b) return true;
+  return a !== undefined && b !== undefined && a.code === b.code && a.message === b.message && a.origin === b.origin;
+}
