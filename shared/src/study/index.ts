@@ -1,0 +1,15 @@
+export * from './refusal';
+export * from './digest';
+export * from './ids';
+export * from './study';
+export * from './verdict';
+export * from './measures';
+export * from './analysis-ports';
+export * from './edit-context';
+export * from './change-requests';
+export * from './model';
+export * from './prove';
+export * from './wording';
+export * from './apply';
+export { definitionDigest, isControlled } from './apply/analyses';
+export * from './views';
