@@ -5,3 +5,5 @@ export * from './commands';
 export * from './permissions';
 export * from './standpoint';
 export * from './views';
+export * from './people';
+export * from './problem';

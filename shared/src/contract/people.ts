@@ -17,14 +17,22 @@ export const PersonName = z
   .max(200)
   .regex(/^[^\p{Cc}\p{Zl}\p{Zp}]*$/u, 'must be one line of text');
 /** Any characters; length alone is asked for, and the server also refuses the commonest ones. */
-export const NewPassword = z.string().min(8, 'must have at least 8 characters').max(128, 'must have at most 128 characters');
+export const NewPassword = z
+  .string()
+  .min(8, 'must have at least 8 characters')
+  .max(128, 'must have at most 128 characters');
 export const StudyKey = z.string().regex(/^[A-Za-z0-9][A-Za-z0-9-]{0,62}$/, 'must be the key of a study');
 const Roles = z
   .array(Role)
   .max(5)
   .refine((roles) => new Set(roles).size === roles.length, 'must name each role once');
 
-export const SessionPerson = z.strictObject({ id: Id, name: z.string(), email: z.string(), administrator: z.boolean() });
+export const SessionPerson = z.strictObject({
+  id: Id,
+  name: z.string(),
+  email: z.string(),
+  administrator: z.boolean(),
+});
 export type SessionPerson = z.infer<typeof SessionPerson>;
 
 export const StudyReference = z.strictObject({ id: Id, key: z.string(), name: z.string() });
@@ -60,6 +68,7 @@ export const OwnSession = z.strictObject({
   startedAt: z.iso.datetime(),
   lastSeenAt: z.iso.datetime(),
 });
+export type OwnSession = z.infer<typeof OwnSession>;
 export const OwnSessions = z.strictObject({ sessions: z.array(OwnSession) });
 
 /** A person as the administrator sees them. */
@@ -75,12 +84,16 @@ export const PersonAnswer = z.strictObject({
   memberships: z.array(MembershipAnswer),
 });
 export type PersonAnswer = z.infer<typeof PersonAnswer>;
-export const PeopleAnswer = z.strictObject({ people: z.array(PersonAnswer) });
+/** All people, and all studies in which roles can be granted. */
+export const PeopleAnswer = z.strictObject({ people: z.array(PersonAnswer), studies: z.array(StudyReference) });
+export type PeopleAnswer = z.infer<typeof PeopleAnswer>;
 
 export const Invitation = z.strictObject({
   name: PersonName,
   email: EmailAddress,
-  memberships: z.array(z.strictObject({ study: StudyKey, roles: Roles.min(1, 'must name at least one role') })).max(100),
+  memberships: z
+    .array(z.strictObject({ study: StudyKey, roles: Roles.min(1, 'must name at least one role') }))
+    .max(100),
 });
 export type Invitation = z.infer<typeof Invitation>;
 
@@ -100,17 +113,6 @@ export const MemberRoles = z.strictObject({ roles: Roles });
 export const StudyMember = z.strictObject({ id: Id, name: z.string(), roles: z.array(Role) });
 export type StudyMember = z.infer<typeof StudyMember>;
 export const StudyMembers = z.strictObject({ members: z.array(StudyMember) });
-
-/** A study as listed for choosing one; `roles` are those of the person asking. */
-export const StudyListing = z.strictObject({
-  id: Id,
-  key: z.string(),
-  name: z.string(),
-  revision: z.int(),
-  roles: z.array(Role),
-});
-export type StudyListing = z.infer<typeof StudyListing>;
-export const StudyListings = z.strictObject({ studies: z.array(StudyListing) });
 
 /** What the product says about itself before anybody signs in. */
 export const About = z.strictObject({ name: z.string(), version: z.string(), demonstration: z.boolean() });
