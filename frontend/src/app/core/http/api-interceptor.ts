@@ -1,0 +1,32 @@
+import { HttpEvent, HttpHandlerFn, HttpRequest } from '@angular/common/http';
+import { inject } from '@angular/core';
+import { Observable, catchError, throwError } from 'rxjs';
+import { SignedOut } from '../session/signed-out';
+import { toProblem } from './problem-error';
+
+const WRITES = new Set(['POST', 'PUT', 'PATCH', 'DELETE']);
+
+/**
+ * Every call to our API: writes carry JSON and an idempotency key (so a repeated request has one effect), failures
+ * become ProblemError, and an expired session is announced once.
+ */
+export function apiInterceptor(request: HttpRequest<unknown>, next: HttpHandlerFn): Observable<HttpEvent<unknown>> {
+  if (!request.url.startsWith('/api/')) return next(request);
+  const signedOut = inject(SignedOut);
+  return next(WRITES.has(request.method) ? asWrite(request) : request).pipe(
+    catchError((error: unknown) => {
+      const problem = toProblem(error);
+      if (problem.status === 401 && !request.url.startsWith('/api/session')) signedOut.announce();
+      return throwError(() => problem);
+    }),
+  );
+}
+
+function asWrite(request: HttpRequest<unknown>): HttpRequest<unknown> {
+  let headers = request.headers;
+  if (!headers.has('Idempotency-Key')) headers = headers.set('Idempotency-Key', crypto.randomUUID());
+  // A form upload must keep the boundary that the browser writes into its own content type.
+  if (request.body instanceof FormData || request.body instanceof Blob) return request.clone({ headers });
+  if (!headers.has('Content-Type')) headers = headers.set('Content-Type', 'application/json');
+  return request.clone({ headers, body: request.body ?? {} });
+}

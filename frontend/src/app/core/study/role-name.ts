@@ -1,0 +1,10 @@
+import type { Role } from '@shared/contract';
+
+/**
+ * What a role is called on screen. The same words as ROLE_NAMES of the contract, which the first load does without
+ * because its module brings the schema library along; a spec keeps the two equal.
+ */
+export function roleName(role: Role): string {
+  const words = role.replaceAll('-', ' ');
+  return words.charAt(0).toUpperCase() + words.slice(1);
+}
