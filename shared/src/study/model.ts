@@ -1,5 +1,12 @@
 import { parseFormula } from '@shared/formula';
-import { buildModel, type Model, type ModelSpec } from '@shared/engine';
+import {
+  buildModel,
+  type FormulaSpec,
+  type FunctionSpec,
+  type InputSpec,
+  type Model,
+  type ModelSpec,
+} from '@shared/engine';
 import { constantById } from '@shared/constants';
 import type { Analysis, BindingSource, Patch } from '@shared/contract';
 import { methodInputs, methodOf } from './analysis-ports';
@@ -20,9 +27,9 @@ export function sourceNode(from: BindingSource): string {
 
 /** The whole study as nodes for the engine: quantities and external results are inputs, lines formulas, methods functions. */
 export function modelSpec(study: Study): ModelSpec {
-  const inputs: ModelSpec['inputs'] = [];
-  const formulas: ModelSpec['formulas'] = [];
-  const functions: ModelSpec['functions'] = [];
+  const inputs: InputSpec[] = [];
+  const formulas: FormulaSpec[] = [];
+  const functions: FunctionSpec[] = [];
   const constants = new Set<string>();
   for (const quantity of study.all('quantity')) {
     inputs.push({
@@ -48,7 +55,7 @@ export function modelSpec(study: Study): ModelSpec {
   return { inputs, formulas, functions };
 }
 
-function addLines(analysis: Analysis, formulas: ModelSpec['formulas']): void {
+function addLines(analysis: Analysis, formulas: FormulaSpec[]): void {
   const bound = new Map(analysis.inputs.map((binding) => [binding.name, sourceNode(binding.from)]));
   analysis.lines.forEach((line, index) => {
     const parsed = parseFormula(line.expression);
@@ -60,7 +67,7 @@ function addLines(analysis: Analysis, formulas: ModelSpec['formulas']): void {
   });
 }
 
-function addMethod(analysis: Analysis, functions: ModelSpec['functions'], inputs: ModelSpec['inputs']): void {
+function addMethod(analysis: Analysis, functions: FunctionSpec[], inputs: InputSpec[]): void {
   const method = methodOf(analysis);
   if (!method) {
     // The version an analysis pins stays in the library as long as a baseline pins it; if it is gone the result says so.
