@@ -92,7 +92,7 @@ class Checker {
         const condition = this.typeOf(node.condition);
         if (condition.dimension !== DIMENSIONLESS) {
           const found = words(condition.dimension);
-          this.fail('dimension', node.condition, `a condition is a comparison, and ${this.quote(node.condition)} is ${found}`);
+          this.fail('dimension', node.condition, `A condition is a comparison, and ${this.quote(node.condition)} is ${found}`);
         }
         const yes = this.typeOf(node.whenTrue);
         const no = this.typeOf(node.whenFalse);
@@ -136,7 +136,7 @@ class Checker {
     const exponent = this.typeOf(node.right);
     if (exponent.dimension !== DIMENSIONLESS) {
       const found = words(exponent.dimension);
-      this.fail('dimension', node.right, `an exponent is a plain number, and ${this.quote(node.right)} is ${found}`);
+      this.fail('dimension', node.right, `An exponent is a plain number, and ${this.quote(node.right)} is ${found}`);
     }
     if (base.dimension === DIMENSIONLESS) return NUMBER;
     const value = constantValue(node.right);
@@ -146,7 +146,7 @@ class Checker {
       return this.fail('exponent', node.right, message);
     }
     const rational = rationalOf(value);
-    if (!rational) return this.fail('exponent', node.right, 'the exponent of a quantity is a simple fraction such as 1/4 or 0.6');
+    if (!rational) return this.fail('exponent', node.right, 'The exponent of a quantity is a simple fraction such as 1/4 or 0.6');
     return { ...NUMBER, dimension: this.bounded(node, () => powerDimension(base.dimension, rational)) };
   }
 
