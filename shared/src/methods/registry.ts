@@ -1,6 +1,13 @@
 import { annihilationEnergy, annihilationPower } from './annihilation/annihilation-energy';
 import { gammaShield, gammaTransmission, mixtureAttenuation } from './annihilation/gamma-attenuation';
 import { shieldHeating } from './annihilation/shield-heating';
+import { kineticEnergy } from './energy/kinetic-energy';
+import {
+  integratedEfficiency,
+  optimumMassRatio,
+  propulsiveEfficiency,
+  relativisticIntegratedEfficiency,
+} from './energy/propulsive-efficiency';
 import { electricAcceleration, startAcceleration } from './jet/acceleration';
 import { electricThrust, electricThrustExhaustSpeed, electricThrustingTime } from './jet/electric-thrust';
 import { jetPower, massFlowThrust, photonThrust, relativisticJetPower } from './jet/jet-power';
@@ -27,6 +34,8 @@ import { propellantForDeltaV, propellantForDeltaVExhaustSpeed } from './rocket/p
 import { propellantLoad } from './rocket/propellant-load';
 import { rocketEquation, rocketEquationExhaustSpeed } from './rocket/rocket-equation';
 import { specificImpulse } from './rocket/specific-impulse';
+import { accelerateOverDistance, constantAcceleration } from './trip/constant-acceleration';
+import { flipAndBurn, tripWithCruise } from './trip/flip-and-burn';
 import type { Method } from './types';
 
 /** Every version of every method, by family. */
@@ -40,6 +49,15 @@ export const METHODS: readonly Method[] = [
   relativisticMassRatio,
   relativisticPropellant,
   relativisticRocketSpeed,
+  constantAcceleration,
+  accelerateOverDistance,
+  flipAndBurn,
+  tripWithCruise,
+  kineticEnergy,
+  propulsiveEfficiency,
+  integratedEfficiency,
+  optimumMassRatio,
+  relativisticIntegratedEfficiency,
   startAcceleration,
   electricAcceleration,
   electricThrust,

@@ -4,10 +4,12 @@ import { JET_CHECKS } from './jets';
 import { MASS_CHECKS } from './masses';
 import { RADIATOR_CHECKS } from './radiators';
 import { ROCKET_CHECKS } from './rockets';
+import { TRIP_CHECKS } from './trips';
 
 /** Every reference value that the tests of this build compare with the library. */
 export const METHOD_CHECKS: readonly Check[] = [
   ...ROCKET_CHECKS,
+  ...TRIP_CHECKS,
   ...JET_CHECKS,
   ...RADIATOR_CHECKS,
   ...ANNIHILATION_CHECKS,

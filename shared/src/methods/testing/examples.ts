@@ -37,6 +37,13 @@ const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
   'mixture-attenuation': [{ rho: 3000, w_1: 0.6, mu_rho_1: 0.0071, w_2: 0.4, mu_rho_2: 0.0063 }],
   'interstellar-heating': [{ v: 0.3 * LIGHT, n: 2e5, f_d: 0.01, eps: 0.8 }],
   'dust-impact': [{ v: 0.3 * LIGHT, d: 1e-6, rho: 2500, n_d: 1e-6, A: 700 }],
+  'accelerate-over-distance': [{ a: 9.80665, x: 1e16 }],
+  'trip-with-cruise': [
+    { a: 9.80665, d: 4e16, v_m: 0.2 * LIGHT },
+    { a: 0.01, d: 1e13, v_m: 0.5 * LIGHT },
+  ],
+  'integrated-efficiency': [{ R: 3 }, { R: 1 }],
+  'relativistic-integrated-efficiency': [{ v_e: LIGHT, R: 2 }],
 };
 
 function collect(): Record<string, Readonly<Record<string, number>>[]> {
