@@ -158,6 +158,8 @@ export interface BudgetShare {
   readonly key: string;
   readonly title: string;
   readonly value: number | null;
+  /** Unit to show it in where its dimension is not the budget's, as in a product. */
+  readonly unit?: string;
   readonly status: 'adopted' | 'proposed';
 }
 export interface BudgetView {
