@@ -7,10 +7,11 @@ import {
   readFileSync,
   renameSync,
   rmSync,
+  statSync,
   statfsSync,
   writeFileSync,
 } from 'node:fs';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { databasePassword, writeAtomically } from './data-directory.mjs';
 import { freePort, portIsFree } from './ports.mjs';
 import { findPostgres, isRoot, runPostgresProgram, serviceAccountIds } from './postgres.mjs';
@@ -42,6 +43,7 @@ export async function startCluster(data, options = {}) {
   const log = join(data.clusterHome, 'postgres.log');
   const password = databasePassword(data);
   if (!existsSync(cluster)) await createCluster(programs, data, cluster, password);
+  checkOwner(cluster);
   const program = matchingProgram(programs, cluster);
 
   let port = await runningPort(program, cluster);
@@ -66,6 +68,7 @@ export async function startCluster(data, options = {}) {
 async function createCluster(programs, data, cluster, password) {
   const unfinished = `${cluster}.new`;
   const passwordCopy = join(data.clusterHome, 'initial-password');
+  if (data.clusterElsewhere) mkdirSync(dirname(data.clusterHome), { recursive: true, mode: 0o711 });
   mkdirSync(data.clusterHome, { recursive: true, mode: 0o700 });
   const { bavail, bsize } = statfsSync(data.clusterHome);
   if (bavail * bsize < leastFreeBytes) {
@@ -93,6 +96,17 @@ async function createCluster(programs, data, cluster, password) {
   } finally {
     rmSync(passwordCopy, { force: true });
   }
+}
+
+/** PostgreSQL only opens files of its own account. @param {string} cluster */
+function checkOwner(cluster) {
+  const owner = statSync(cluster).uid;
+  const ours = isRoot ? serviceAccountIds().uid : process.getuid?.();
+  if (owner === ours) return;
+  throw new Refusal(
+    `The database in ${cluster} belongs to the account with number ${owner}, this start would run it as ${ours}. ` +
+      'Start as the account that started it first, or name another place: DATA_DIR=/some/where npm start',
+  );
 }
 
 /** pg_ctl of the version that made the cluster. @param {string} programs @param {string} cluster */

@@ -38,12 +38,16 @@ export function openDataDirectory(directory) {
     writeAtomically(marker, `${JSON.stringify({ product: 'deltaproof', layout: 1 })}\n`);
   }
   checkMarker(marker, path);
-  const clusterElsewhere = !clusterAccountCanReach(path);
-  if (clusterElsewhere && !isRoot) throw new Refusal(`The data directory ${path} cannot be entered by this account.`);
   const name = createHash('sha256').update(path).digest('hex').slice(0, 16);
+  const inside = join(path, 'postgres');
+  const elsewhere = join(reachableRoot, name);
+  // A cluster that exists stays where it is, whatever has become of the permissions since.
+  const clusterElsewhere =
+    existsSync(join(elsewhere, 'cluster')) ||
+    (isRoot && !existsSync(join(inside, 'cluster')) && !clusterAccountCanReach(path));
   return {
     path,
-    clusterHome: clusterElsewhere ? join(reachableRoot, name) : join(path, 'postgres'),
+    clusterHome: clusterElsewhere ? elsewhere : inside,
     clusterElsewhere,
     passwordFile: join(path, 'database-password'),
     runningFile: join(path, 'running.json'),

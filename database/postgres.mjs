@@ -1,6 +1,6 @@
 /** Where Debian's PostgreSQL programs are, and how to run them: initdb and pg_ctl refuse to run as root. */
-import { accessSync, constants, existsSync, readdirSync } from 'node:fs';
-import { dirname, join, resolve } from 'node:path';
+import { existsSync, readdirSync } from 'node:fs';
+import { join } from 'node:path';
 import { execFileSync } from 'node:child_process';
 import { run } from './processes.mjs';
 
@@ -36,20 +36,10 @@ export function serviceAccountIds() {
   return { uid: number('-u'), gid: number('-g') };
 }
 
-/** Whether the account that runs the cluster may enter every directory above `directory`. @param {string} directory */
+/** As root: whether the service account may enter a directory and so every one above it. @param {string} directory */
 export function clusterAccountCanReach(directory) {
-  let ancestor = resolve(directory);
-  while (!existsSync(ancestor)) ancestor = dirname(ancestor);
-  if (!isRoot) {
-    try {
-      accessSync(ancestor, constants.X_OK);
-      return true;
-    } catch {
-      return false;
-    }
-  }
   try {
-    execFileSync('runuser', ['-u', serviceAccount, '--', 'test', '-x', ancestor], { cwd: '/', stdio: 'ignore' });
+    execFileSync('runuser', ['-u', serviceAccount, '--', 'test', '-x', directory], { cwd: '/', stdio: 'ignore' });
     return true;
   } catch {
     return false;

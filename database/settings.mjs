@@ -28,7 +28,6 @@ export function readSettings(env = process.env) {
     publicUrl: env.PUBLIC_URL ?? `http://localhost:${port}`,
     databaseUrl: env.DATABASE_URL,
   };
-  checkPublicUrl(settings, env.LOOPBACK_HTTP === '1');
   if (production && settings.demo) {
     throw new Refusal(
       'DEMO=1 would put accounts with a published password into production.',
@@ -41,6 +40,7 @@ export function readSettings(env = process.env) {
       exitCodes.notValid,
     );
   }
+  checkPublicUrl(settings, env.LOOPBACK_HTTP === '1');
   return settings;
 }
 

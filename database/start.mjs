@@ -32,6 +32,8 @@ async function main() {
     await stopChildren();
     const late = await starting.catch(() => undefined);
     await late?.stop();
+    say('Stopped before it was ready; the next start takes up from here.');
+    process.exitCode = 1;
     return;
   }
   say(`\nDeltaproof is ready:  ${outcome.url}\n`);
