@@ -20,7 +20,7 @@ export function buildModel(spec: ModelSpec): BuildResult {
   values.set(constants, ids.length);
   const checks = new CheckTable(spec.checks ?? [], rankOf, ids.length);
   const propagation = new Propagation(program, values, checks);
-  for (const { id, value } of spec.inputs) propagation.write(rankOf.get(id) ?? -1, value ?? NaN);
+  for (const { id, value } of spec.inputs) propagation.write(rankOf.get(id) ?? -1, value);
   propagation.recompute();
   return { ok: true, model: new TapeModel(program, rankOf, propagation, checks) };
 }

@@ -9,10 +9,29 @@ import {
 import { Op, STRIDE } from './tape';
 
 /** Operations that turn an infinite argument into a finite result and so need it caught before. */
-const SWALLOWS: ReadonlySet<Op> = new Set([Op.Power, Op.Exp, Op.Expm1, Op.Atan, Op.Tanh, Op.Sign, Op.Atan2, Op.Min, Op.Max]);
+const SWALLOWS: ReadonlySet<Op> = new Set([
+  Op.Power,
+  Op.Exp,
+  Op.Expm1,
+  Op.Atan,
+  Op.Tanh,
+  Op.Sign,
+  Op.Atan2,
+  Op.Min,
+  Op.Max,
+]);
 
 /** Operations whose result is finite or NaN whatever the argument. */
-const NEVER_INFINITE: ReadonlySet<Op> = new Set([Op.Sin, Op.Cos, Op.Atan, Op.Atan2, Op.Tanh, Op.Sign, Op.Asin, Op.Acos]);
+const NEVER_INFINITE: ReadonlySet<Op> = new Set([
+  Op.Sin,
+  Op.Cos,
+  Op.Atan,
+  Op.Atan2,
+  Op.Tanh,
+  Op.Sign,
+  Op.Asin,
+  Op.Acos,
+]);
 
 const BINARY_OP: Readonly<Record<BinaryOperator, Op>> = {
   '+': Op.Add,

@@ -76,7 +76,11 @@ function nameOf(spec: ModelSpec, item: Item): string {
 }
 
 /** Walks back from a stuck item to what it waits for until an item comes again; the ids read on the way are the cycle. */
-function cycleAmong(stuck: ReadonlySet<number>, items: readonly Item[], providers: ReadonlyMap<string, number>): string[] {
+function cycleAmong(
+  stuck: ReadonlySet<number>,
+  items: readonly Item[],
+  providers: ReadonlyMap<string, number>,
+): string[] {
   const [start = 0] = stuck;
   const placeOf = new Map<number, number>();
   const path: string[] = [];

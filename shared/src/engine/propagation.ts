@@ -69,14 +69,14 @@ export class Propagation {
     return this.failures.get(rank);
   }
 
-  /** Writes an input (NaN: no value) and marks what follows from it. */
-  write(rank: number, value: number): void {
-    const missing = value !== value;
+  /** Writes an input and marks what follows from it; null or no finite number: the input has no value. */
+  write(rank: number, value: number | null): void {
+    if (value !== null && Number.isFinite(value)) {
+      this.store(rank, value, undefined);
+      return;
+    }
     const label = this.program.inputLabels.get(rank) ?? '';
-    const failure = missing
-      ? { code: 'missing' as const, message: `${label} has no value`, origin: this.program.ids[rank] ?? '' }
-      : undefined;
-    this.store(rank, value, failure);
+    this.store(rank, NaN, { code: 'missing', message: `${label} has no value`, origin: this.program.ids[rank] ?? '' });
   }
 
   /** Recomputes everything marked, in the order of ranks. */

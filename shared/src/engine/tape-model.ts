@@ -136,9 +136,7 @@ export class TapeModel implements Model {
 
   private apply(changes: Changes, ranks: readonly number[]): void {
     let i = 0;
-    for (const value of changes.values()) {
-      this.propagation.write(ranks[i++] as number, value !== null && Number.isFinite(value) ? value : NaN);
-    }
+    for (const value of changes.values()) this.propagation.write(ranks[i++] as number, value);
     this.propagation.propagate();
   }
 

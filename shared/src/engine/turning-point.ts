@@ -93,7 +93,11 @@ function narrow(f: (x: number) => number, first: Point, second: Point): number |
     const half = (c.x - b.x) / 2;
     if (Math.abs(half) <= tolerance || b.y === 0) break;
     const step = interpolate(a, b, c, half);
-    if (Math.abs(before) >= tolerance && step !== null && Math.abs(2 * step) < Math.min(3 * Math.abs(half), Math.abs(before))) {
+    if (
+      Math.abs(before) >= tolerance &&
+      step !== null &&
+      Math.abs(2 * step) < Math.min(3 * Math.abs(half), Math.abs(before))
+    ) {
       before = width;
       width = step;
     } else {

@@ -48,14 +48,7 @@ export interface CallNode extends Place {
 }
 
 /** The only things a formula can consist of. */
-export type FormulaNode =
-  | NumberNode
-  | NameNode
-  | NegateNode
-  | BinaryNode
-  | CompareNode
-  | ConditionalNode
-  | CallNode;
+export type FormulaNode = NumberNode | NameNode | NegateNode | BinaryNode | CompareNode | ConditionalNode | CallNode;
 
 /** A parsed formula: the text as typed, its tree, and the names it reads in order of first appearance. */
 export interface Formula {
@@ -90,5 +83,4 @@ export type FormulaErrorCode =
   | 'exponent';
 
 export type FormulaResult =
-  | { readonly ok: true; readonly formula: Formula }
-  | { readonly ok: false; readonly error: FormulaError };
+  { readonly ok: true; readonly formula: Formula } | { readonly ok: false; readonly error: FormulaError };

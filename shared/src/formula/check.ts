@@ -21,8 +21,7 @@ export interface Typed {
 }
 
 export type CheckResult =
-  | { readonly ok: true; readonly type: Typed }
-  | { readonly ok: false; readonly error: FormulaError };
+  { readonly ok: true; readonly type: Typed } | { readonly ok: false; readonly error: FormulaError };
 
 /** A type during the check; `zero` marks the literal 0, which fits any dimension. */
 interface Working {
@@ -92,7 +91,11 @@ class Checker {
         const condition = this.typeOf(node.condition);
         if (condition.dimension !== DIMENSIONLESS) {
           const found = words(condition.dimension);
-          this.fail('dimension', node.condition, `A condition is a comparison, and ${this.quote(node.condition)} is ${found}`);
+          this.fail(
+            'dimension',
+            node.condition,
+            `A condition is a comparison, and ${this.quote(node.condition)} is ${found}`,
+          );
         }
         const yes = this.typeOf(node.whenTrue);
         const no = this.typeOf(node.whenFalse);
@@ -118,7 +121,11 @@ class Checker {
     if (left.zero && right.zero) return left;
     if (!left.zero && !right.zero && left.dimension !== right.dimension) {
       const [a, b] = [words(left.dimension), words(right.dimension)];
-      this.fail('dimension', node, `${this.quote(node)} ${node.op === '+' ? `adds ${b} to ${a}` : `subtracts ${b} from ${a}`}`);
+      this.fail(
+        'dimension',
+        node,
+        `${this.quote(node)} ${node.op === '+' ? `adds ${b} to ${a}` : `subtracts ${b} from ${a}`}`,
+      );
     }
     if (right.zero) return left;
     if (left.zero) return node.op === '+' ? right : this.negated(right);
@@ -146,7 +153,8 @@ class Checker {
       return this.fail('exponent', node.right, message);
     }
     const rational = rationalOf(value);
-    if (!rational) return this.fail('exponent', node.right, 'The exponent of a quantity is a simple fraction such as 1/4 or 0.6');
+    if (!rational)
+      return this.fail('exponent', node.right, 'The exponent of a quantity is a simple fraction such as 1/4 or 0.6');
     return { ...NUMBER, dimension: this.bounded(node, () => powerDimension(base.dimension, rational)) };
   }
 
@@ -164,7 +172,11 @@ class Checker {
       case 'sign':
         return NUMBER;
       case 'same':
-        return this.alike(node, types, (a, b) => `${this.quote(node)}: ${node.fn} takes quantities alike, not ${a} and ${b}`);
+        return this.alike(
+          node,
+          types,
+          (a, b) => `${this.quote(node)}: ${node.fn} takes quantities alike, not ${a} and ${b}`,
+        );
       case 'ratio':
         this.alike(node, types, (a, b) => `${this.quote(node)}: ${node.fn} takes quantities alike, not ${a} and ${b}`);
         return NUMBER;
@@ -177,7 +189,11 @@ class Checker {
         const argument = node.args[wrong];
         if (!argument) return NUMBER;
         const found = words((types[wrong] ?? NUMBER).dimension);
-        return this.fail('dimension', argument, `${node.fn} takes a plain number, and ${this.quote(argument)} is ${found}`);
+        return this.fail(
+          'dimension',
+          argument,
+          `${node.fn} takes a plain number, and ${this.quote(argument)} is ${found}`,
+        );
       }
     }
   }
@@ -212,7 +228,8 @@ class Checker {
     } catch (error) {
       if (!(error instanceof RangeError)) throw error;
     }
-    if (dimension?.exponents.every((e) => Math.abs(e.n) <= LARGEST_EXPONENT && e.d <= LARGEST_EXPONENT)) return dimension;
+    if (dimension?.exponents.every((e) => Math.abs(e.n) <= LARGEST_EXPONENT && e.d <= LARGEST_EXPONENT))
+      return dimension;
     return this.fail('exponent', node, `${this.quote(node)} has a unit with exponents beyond ${LARGEST_EXPONENT}`);
   }
 

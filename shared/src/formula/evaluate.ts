@@ -9,7 +9,11 @@ export type ReadName = (name: string) => number | Failure;
  * Computes a tree step by step, in SI. Only the branch a condition chooses is computed. A step without a finite result
  * becomes a failure whose message ends in `where`; a failed name passes its failure on, the leftmost first.
  */
-export function evaluateTree(root: FormulaNode, read: ReadName, where: { origin: string; label: string }): number | Failure {
+export function evaluateTree(
+  root: FormulaNode,
+  read: ReadName,
+  where: { origin: string; label: string },
+): number | Failure {
   const failed = (problem: Problem): Failure => ({
     code: problem.code,
     message: where.label ? `${problem.message} in ${where.label}` : problem.message,

@@ -1,4 +1,12 @@
-export type { Formula, FormulaError, FormulaErrorCode, FormulaNode, FormulaResult, BinaryOperator, CompareOperator } from './ast';
+export type {
+  Formula,
+  FormulaError,
+  FormulaErrorCode,
+  FormulaNode,
+  FormulaResult,
+  BinaryOperator,
+  CompareOperator,
+} from './ast';
 export { applyFunction, binary, compare, power, roundHalfAway } from './arithmetic';
 export { checkFormula, type CheckResult, type Typed } from './check';
 export { evaluateFormula, evaluateTree, type ReadName } from './evaluate';

@@ -58,7 +58,12 @@ function syntaxError(error: unknown, text: string, places: readonly number[]): F
   const from = places[char] ?? text.length;
   const to = Math.min(from + 1, text.length);
   if (raw.startsWith('Unexpected end') || from >= text.length) {
-    return make('syntax', 'The formula ends too soon: a value is missing', Math.max(0, text.trimEnd().length - 1), text.length);
+    return make(
+      'syntax',
+      'The formula ends too soon: a value is missing',
+      Math.max(0, text.trimEnd().length - 1),
+      text.length,
+    );
   }
   if (raw.startsWith('Value expected')) return make('syntax', 'A value is missing here', from, to);
   if (raw.startsWith('False part')) return make('syntax', 'The part after ":" of the condition is missing', from, to);

@@ -90,7 +90,12 @@ export function scan(text: string): ScanResult {
     error: { code, message, from, to },
   });
   if (text.length > MAX_LENGTH) {
-    return refuse('too-long', `A formula has at most ${MAX_LENGTH} characters; this one has ${text.length}`, MAX_LENGTH, text.length);
+    return refuse(
+      'too-long',
+      `A formula has at most ${MAX_LENGTH} characters; this one has ${text.length}`,
+      MAX_LENGTH,
+      text.length,
+    );
   }
   const tokens: Token[] = [];
   const places: number[] = [];

@@ -3,7 +3,8 @@ import type { TemperatureKind } from '@shared/units';
 /** The kind of a temperature while a sum is checked; `negated` is minus an absolute one, undefined is plain kelvin. */
 export type Temperature = TemperatureKind | 'negated' | undefined;
 
-type Combined = { readonly ok: true; readonly temperature: Temperature } | { readonly ok: false; readonly message: string };
+type Combined =
+  { readonly ok: true; readonly temperature: Temperature } | { readonly ok: false; readonly message: string };
 
 /** A kind of temperature in words. */
 export function temperatureWords(kind: Temperature): string {

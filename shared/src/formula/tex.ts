@@ -105,9 +105,15 @@ class Typesetter {
   private binary(op: string, left: FormulaNode, right: FormulaNode): Piece {
     switch (op) {
       case '+':
-        return { tex: `${this.at(left, Tightness.Sum)} + ${this.at(right, Tightness.Product)}`, tightness: Tightness.Sum };
+        return {
+          tex: `${this.at(left, Tightness.Sum)} + ${this.at(right, Tightness.Product)}`,
+          tightness: Tightness.Sum,
+        };
       case '-':
-        return { tex: `${this.at(left, Tightness.Sum)} - ${this.at(right, Tightness.Product)}`, tightness: Tightness.Sum };
+        return {
+          tex: `${this.at(left, Tightness.Sum)} - ${this.at(right, Tightness.Product)}`,
+          tightness: Tightness.Sum,
+        };
       case '*': {
         const tex = `${this.at(left, Tightness.Sign)} \\cdot ${this.at(right, Tightness.Product)}`;
         return { tex, tightness: Tightness.Product };

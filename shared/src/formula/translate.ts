@@ -73,14 +73,16 @@ export function translate(tree: unknown, tokens: readonly Token[]): { node: Form
   const operator = (node: ParsedNode, depth: number): FormulaNode => {
     const args = node.args ?? [];
     const op = typeof node.op === 'string' ? node.op : '';
-    if (node.implicit === true) return fail('implicit-multiplication', 'Write the multiplication sign', peek().from, peek().to);
+    if (node.implicit === true)
+      return fail('implicit-multiplication', 'Write the multiplication sign', peek().from, peek().to);
     if (args.length === 1 && (op === '-' || op === '+')) {
       const sign = take('operator', op);
       const operand = child(args[0], depth);
       if (op === '+') return { ...operand, from: sign.from };
       return { kind: 'negate', operand, from: sign.from, to: operand.to };
     }
-    if (args.length !== 2) return fail('construct', `The operator "${op}" is not part of a formula`, peek().from, peek().to);
+    if (args.length !== 2)
+      return fail('construct', `The operator "${op}" is not part of a formula`, peek().from, peek().to);
     const left = child(args[0], depth);
     if (!BINARY.has(op) && !COMPARE.has(op)) {
       return fail('construct', `The operator "${op}" is not part of a formula`, peek().from, peek().to);
