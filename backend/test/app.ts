@@ -7,6 +7,7 @@ import { createApp } from '../src/app';
 import { routes as allRoutes } from '../src/features';
 import type { Route } from '../src/middleware/routes';
 import { type Config, readConfig } from '../src/platform/config';
+import { closeDatabase, type Database, openDatabase } from '../src/platform/database';
 import { createLogger } from '../src/platform/logger';
 import type { Services } from '../src/services';
 import { startServices, stopServices } from '../src/start-services';
@@ -27,6 +28,9 @@ export interface TestAppOptions {
   readonly routes?: readonly Route[];
 }
 
+/** Model classes belong to one connection per process, so apps that run side by side in a test share it. */
+let shared: { readonly database: Database; readonly apps: number } | null = null;
+
 /** The whole app on this test file's own database: light password hashing, no logging, mails kept in the catcher. */
 export async function createTestApp(options: TestAppOptions = {}): Promise<TestApp> {
   const dataDirectory = fs.mkdtempSync(path.join(os.tmpdir(), 'deltaproof-app-'));
@@ -46,12 +50,20 @@ export async function createTestApp(options: TestAppOptions = {}): Promise<TestA
     passwordHashing: { memoryKiB: 19 * 1024, passes: 2 },
     ...options.config,
   };
-  const services: Services = { ...(await startServices(config, createLogger(config.logLevel))), ...options.services };
+  const logger = createLogger(config.logLevel);
+  const database = shared?.database ?? openDatabase(config.databaseUrl, logger);
+  shared = { database, apps: (shared?.apps ?? 0) + 1 };
+  const services: Services = { ...(await startServices(config, logger, database)), ...options.services };
   return {
     app: createApp(services, options.routes ?? allRoutes),
     services,
     close: async () => {
       await stopServices(services);
+      shared = { database, apps: (shared?.apps ?? 1) - 1 };
+      if (shared.apps === 0) {
+        shared = null;
+        await closeDatabase(database);
+      }
       fs.rmSync(dataDirectory, { recursive: true, force: true });
     },
   };
