@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { serverDirectory } from './build.mjs';
 import { startProduct } from './product.mjs';
 import { stopChildren } from './processes.mjs';
-import { Refusal } from './refusal.mjs';
+import { Refusal, fileSystemRefusal } from './refusal.mjs';
 import { readSettings } from './settings.mjs';
 
 const say = (/** @type {string} */ line) => console.log(line);
@@ -55,6 +55,7 @@ function announceDemonstration() {
 
 main().catch((/** @type {unknown} */ error) => {
   if (stopping !== undefined) return;
-  console.error(error instanceof Refusal ? `\n${error.message}` : error);
-  process.exitCode = error instanceof Refusal ? error.exitCode : 1;
+  const refusal = error instanceof Refusal ? error : fileSystemRefusal(error);
+  console.error(refusal === undefined ? error : `\n${refusal.message}`);
+  process.exitCode = refusal?.exitCode ?? 1;
 });

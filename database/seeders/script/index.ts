@@ -1,0 +1,4 @@
+export * from './executor';
+export * from './play';
+export * from './procedure';
+export * from './words';
