@@ -14,6 +14,11 @@ export const PROBLEM_CODES = [
   'method-not-allowed',
   'stale',
   'conflict',
+  'refused',
+  'controlled',
+  'in-use',
+  'cycle',
+  'state',
   'link-not-valid',
   'idempotency-key-missing',
   'idempotency-key-reused',
@@ -34,6 +39,8 @@ export const ProblemField = z.strictObject({
   message: z.string(),
   /** What would be right, where it can be said. */
   expected: z.string().optional(),
+  /** Character range inside a formula that is refused. */
+  range: z.strictObject({ from: z.int(), to: z.int() }).optional(),
 });
 export type ProblemField = z.infer<typeof ProblemField>;
 

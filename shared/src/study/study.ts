@@ -38,6 +38,13 @@ export class Study {
     return new Study(this);
   }
 
+  /** A copy that no longer sees its base: what is there now, whatever the base becomes. */
+  detached(): Study {
+    const copy = new Study();
+    for (const kind of ENTITY_KINDS) for (const entity of this.all(kind)) copy.put(kind, entity as never);
+    return copy;
+  }
+
   /** The entity, or undefined when there is none of that identifier. */
   get<K extends EntityKind>(kind: K, id: string): EntityKinds[K] | undefined {
     const own = this.tables.get(kind)!.get(id);
