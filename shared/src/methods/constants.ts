@@ -17,3 +17,7 @@ export const c = bySymbol('c').value;
 export const g_0 = bySymbol('g_0').value;
 /** Stefan–Boltzmann constant, W/(m² K⁴). */
 export const sigma = bySymbol('sigma').value;
+/** Elementary charge, C. */
+export const q_e = bySymbol('q_e').value;
+/** Molar gas constant, J/(mol K). */
+export const R_gas = bySymbol('R_gas').value;

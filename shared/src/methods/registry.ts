@@ -8,12 +8,27 @@ import {
   propulsiveEfficiency,
   relativisticIntegratedEfficiency,
 } from './energy/propulsive-efficiency';
+import { fusionExhaustSpeed } from './fusion/exhaust-speed';
+import {
+  deuteriumHelium3,
+  deuteriumNeutronBranch,
+  deuteriumProtonBranch,
+  deuteriumTritium,
+  fuelSpecificEnergy,
+} from './fusion/reaction-energy';
+import { heatSinkCooling, heatSinkStorage, heatSinkWarming } from './heat-sink/heat-sink';
 import { electricAcceleration, startAcceleration } from './jet/acceleration';
 import { electricThrust, electricThrustExhaustSpeed, electricThrustingTime } from './jet/electric-thrust';
+import { ionBeam, ionThruster } from './jet/ion-thruster';
 import { jetPower, massFlowThrust, photonThrust, relativisticJetPower } from './jet/jet-power';
+import { characteristicSpeed, optimumExhaustSpeed, powerLimitedPayload } from './jet/optimum-exhaust-speed';
 import { specificPower } from './jet/specific-power';
+import { thrusterEfficiency } from './jet/thruster-efficiency';
 import { massMargins, massRollUp } from './mass/mass-roll-up';
 import { dustImpact, interstellarHeating } from './medium/gas-heating';
+import { isentropicFlow, nozzleAreaRatio, nozzleExhaustSpeed } from './nozzle/exhaust';
+import { nozzlePerformance, nozzlePerformanceAreaRatio, nozzleThroat } from './nozzle/performance';
+import { heatEngineRadiator, heatEngineRadiatorOptimum } from './radiator/carnot';
 import { radiatorConvexEnvelope } from './radiator/convex-envelope';
 import { cylinderEnvelopeArea, radialFinEnvelope } from './radiator/cylinder-envelope';
 import { radiatorHeatRejection } from './radiator/heat-rejection';
@@ -63,11 +78,25 @@ export const METHODS: readonly Method[] = [
   electricThrust,
   electricThrustExhaustSpeed,
   electricThrustingTime,
+  ionBeam,
+  ionThruster,
   jetPower,
   relativisticJetPower,
   photonThrust,
   massFlowThrust,
+  characteristicSpeed,
+  powerLimitedPayload,
+  optimumExhaustSpeed,
   specificPower,
+  thrusterEfficiency,
+  nozzleExhaustSpeed,
+  nozzleAreaRatio,
+  isentropicFlow,
+  nozzleThroat,
+  nozzlePerformance,
+  nozzlePerformanceAreaRatio,
+  heatEngineRadiator,
+  heatEngineRadiatorOptimum,
   radiatorConvexEnvelope,
   cylinderEnvelopeArea,
   radialFinEnvelope,
@@ -78,12 +107,21 @@ export const METHODS: readonly Method[] = [
   surfaceFluxRatio,
   steadySurfaceTemperature,
   plateFacingStar,
+  heatSinkCooling,
+  heatSinkStorage,
+  heatSinkWarming,
   annihilationEnergy,
   annihilationPower,
   gammaTransmission,
   gammaShield,
   mixtureAttenuation,
   shieldHeating,
+  fusionExhaustSpeed,
+  deuteriumTritium,
+  deuteriumHelium3,
+  deuteriumNeutronBranch,
+  deuteriumProtonBranch,
+  fuelSpecificEnergy,
   interstellarHeating,
   dustImpact,
   massRollUp,

@@ -1,7 +1,9 @@
 import { ANNIHILATION_CHECKS } from './annihilation';
 import type { Check } from './check';
+import { HEAT_AND_FUSION_CHECKS } from './heat-and-fusion';
 import { JET_CHECKS } from './jets';
 import { MASS_CHECKS } from './masses';
+import { NOZZLE_CHECKS } from './nozzles';
 import { RADIATOR_CHECKS } from './radiators';
 import { ROCKET_CHECKS } from './rockets';
 import { TRIP_CHECKS } from './trips';
@@ -11,7 +13,9 @@ export const METHOD_CHECKS: readonly Check[] = [
   ...ROCKET_CHECKS,
   ...TRIP_CHECKS,
   ...JET_CHECKS,
+  ...NOZZLE_CHECKS,
   ...RADIATOR_CHECKS,
+  ...HEAT_AND_FUSION_CHECKS,
   ...ANNIHILATION_CHECKS,
   ...MASS_CHECKS,
 ];

@@ -1,5 +1,7 @@
 import type { Check } from './check';
 
+const PROPTOOLS = 'github.com/mvernacc/proptools';
+
 /** Family M5: jets, thrust and power. */
 export const JET_CHECKS: readonly Check[] = [
   {
@@ -11,6 +13,46 @@ export const JET_CHECKS: readonly Check[] = [
     tolerance: 1e-6,
     provenance: 'published',
     source: 'http://www.projectrho.com/public_html/rocket/realdesignsfusion.php (thrust power)',
+  },
+  {
+    id: 'M5-04',
+    method: 'ion-beam',
+    inputs: { V: 1000, I: 1, m_i: [131.293, 'u'] },
+    output: 'F',
+    expected: 0.0522,
+    tolerance: 1e-3,
+    provenance: 'published',
+    source: `${PROPTOOLS} docs/source/examples (xenon, 1 kV, 1 A)`,
+  },
+  {
+    id: 'M5-05',
+    method: 'ion-thruster',
+    inputs: { V: 1500, m_i: [131.293, 'u'], theta: [10, 'deg'], r_I: 0.1, eta_m: 0.9 },
+    output: 'I_sp',
+    expected: 4127,
+    tolerance: 2e-3,
+    provenance: 'published',
+    source: `Goebel and Katz, Fundamentals of Electric Propulsion (2008), pp. 24-29, in ${PROPTOOLS} proptools/electric/electric_test.py`,
+  },
+  {
+    id: 'M5-06',
+    method: 'characteristic-speed',
+    inputs: { eta: 0.708, t: 1e7, a_s: 0.1 },
+    output: 'v_ch',
+    expected: 11900,
+    tolerance: 1e-3,
+    provenance: 'published',
+    source: `${PROPTOOLS} proptools/electric/electric_test.py (Lozano, MIT 16.522 notes, eq. 3-7)`,
+  },
+  {
+    id: 'M5-08',
+    method: 'optimum-exhaust-speed',
+    inputs: { dv: 2000, t: 8640000, eta: 0.7, a_s: 0.05 },
+    output: 'lambda',
+    expected: 0.759185195475754,
+    tolerance: 1e-6,
+    provenance: 'computed',
+    source: 'Minimiser against the root of the stationarity condition',
   },
   {
     id: 'M5-09',

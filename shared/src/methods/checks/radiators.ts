@@ -3,6 +3,26 @@ import type { Check } from './check';
 /** Family M7 and the steady temperature of M17: radiators and surface temperatures. */
 export const RADIATOR_CHECKS: readonly Check[] = [
   {
+    id: 'M7-02',
+    method: 'heat-engine-radiator-optimum',
+    inputs: { P: 1e6, T_h: 1600, eps: 0.9 },
+    output: 'T_r',
+    expected: 1200,
+    tolerance: 1e-6,
+    provenance: 'published',
+    source: 'Borgnakke and Sonntag, Fundamentals of Thermodynamics, problem 7.1 (radiator at 3/4 of the hot side)',
+  },
+  {
+    id: 'M7-03',
+    method: 'heat-engine-radiator-optimum',
+    inputs: { P: 1e6, T_h: 1600, eps: 0.9, T_s: 0 },
+    output: 'A',
+    expected: 28.3492794175898,
+    tolerance: 1e-6,
+    provenance: 'computed',
+    source: 'Numerical minimum against (256/27) P/(eps σ T_h⁴)',
+  },
+  {
     id: 'M7-06',
     method: 'surface-flux-ratio',
     inputs: { P: 3.828e26, A: 4 * Math.PI * 6.957e8 ** 2 },

@@ -44,6 +44,15 @@ const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
   ],
   'integrated-efficiency': [{ R: 3 }, { R: 1 }],
   'relativistic-integrated-efficiency': [{ v_e: LIGHT, R: 2 }],
+  'power-limited-payload': [{ dv: 2000, C: 14000, t: 8640000, eta: 0.7, a_s: 0.05 }],
+  'thruster-efficiency': [{ F: 0.236, v_e: 41100, P: 6900 }],
+  'heat-engine-radiator': [{ P: 1e6, T_h: 1400, T_r: 812, T_s: 200, eps: 0.88, k: 0.6 }],
+  'nozzle-performance': [{ p_c: 7e6, p_e: 5e3, T_c: 2700, k: 1.3, M: 0.002016, eta_n: 0.97 }],
+  'heat-sink-cooling': [{ m: 500, c_p: 900, A: 10, eps: 0.85, T_1: 1200, T_2: 600, T_s: 7 }],
+  'heat-sink-warming': [{ m: 500, c_p: 900, A: 10, eps: 0.85, Q: 5e5, T_1: 300, T_2: 900, T_s: 100 }],
+  'heat-sink-storage': [{ m: 50, c_p: 900, T_1: 300, T_2: 900, Q: 1e3, m_L: 20, L: 4e5 }],
+  'fusion-energy-d-d-p': [{ m: 3 }],
+  'fuel-specific-energy': [{ Q: 8.7 * 1.602176634e-13, m_1: 1.6726e-27, m_2: 1.82767e-26 }],
 };
 
 function collect(): Record<string, Readonly<Record<string, number>>[]> {

@@ -1,0 +1,133 @@
+import type { Check } from './check';
+
+const PROCESS = 'UKAEA PROCESS documentation, plasma model page';
+const MARSPEDIA = 'https://marspedia.org Fusion Propulsion table';
+/** Sphere of 12 mm diameter. */
+const SPHERE_AREA = Math.PI * 0.012 ** 2;
+const SPHERE_MASS = (8900 * Math.PI * 0.012 ** 3) / 6;
+const STORE = { m: 500, c_p: 900, A: 10, eps: 0.85, T_1: 1200, T_2: 600 };
+
+/** Families M8 and M10: heat sinks and fusion. */
+export const HEAT_AND_FUSION_CHECKS: readonly Check[] = [
+  {
+    id: 'M8-01',
+    method: 'heat-sink-cooling',
+    inputs: { m: SPHERE_MASS, c_p: 390, A: SPHERE_AREA, eps: 1, T_1: 300, T_2: 150, T_s: 0 },
+    output: 't',
+    expected: [3, 'h'],
+    tolerance: 3e-2,
+    provenance: 'published',
+    source: 'I. E. Irodov, Problems in General Physics 5.251, https://solveirodov.com/problems/5-251 (copper sphere)',
+  },
+  {
+    id: 'M8-03',
+    method: 'heat-sink-cooling',
+    inputs: { ...STORE, T_s: 250 },
+    output: 't',
+    expected: 1279.54027721154,
+    tolerance: 1e-6,
+    provenance: 'computed',
+    source: 'Numerical integration against the closed form of Incropera and DeWitt, section 5.3',
+  },
+  {
+    id: 'M8-04',
+    method: 'heat-sink-cooling',
+    inputs: { ...STORE, T_s: 0 },
+    output: 't',
+    expected: 1260.70913174693,
+    tolerance: 1e-6,
+    provenance: 'computed',
+    source: 'Numerical integration against the closed form without sink',
+  },
+  {
+    id: 'M8-05',
+    method: 'heat-sink-storage',
+    inputs: { m: 2000, c_p: 4200, T_1: 300, T_2: 360, Q: 1e5 },
+    output: 't',
+    expected: 5040,
+    tolerance: 1e-9,
+    provenance: 'arithmetic',
+    source: '2000 kg × 4200 J/(kg K) × 60 K / 100 kW',
+  },
+  {
+    id: 'M10-01',
+    method: 'fusion-energy-d-t',
+    inputs: {},
+    output: 'Q',
+    expected: [17.6, 'MeV'],
+    tolerance: 2e-3,
+    provenance: 'published',
+    source: PROCESS,
+  },
+  {
+    id: 'M10-03',
+    method: 'fusion-energy-d-d-n',
+    inputs: {},
+    output: 'Q',
+    expected: [3.27, 'MeV'],
+    tolerance: 2e-3,
+    provenance: 'published',
+    source: PROCESS,
+  },
+  {
+    id: 'M10-05',
+    method: 'fusion-energy-d-t',
+    inputs: {},
+    output: 'q',
+    expected: 3.4e14,
+    tolerance: 1e-2,
+    provenance: 'published',
+    source: MARSPEDIA,
+  },
+  {
+    id: 'M10-08',
+    method: 'fusion-energy-d-t',
+    inputs: {},
+    output: 'K_4',
+    expected: [14.1, 'MeV'],
+    tolerance: 1e-2,
+    provenance: 'published',
+    source: `${MARSPEDIA}; NRL Plasma Formulary (rounded; zero-temperature kinematics gives 14.03)`,
+  },
+  {
+    id: 'M10-09',
+    method: 'fusion-energy-d-he3',
+    inputs: {},
+    output: 'K_4',
+    expected: [14.7, 'MeV'],
+    tolerance: 1e-2,
+    provenance: 'published',
+    source: `${MARSPEDIA}; NRL Plasma Formulary (rounded; zero-temperature kinematics gives 14.64)`,
+  },
+  {
+    id: 'M10-10',
+    method: 'fusion-exhaust-speed',
+    inputs: { q: 3.52e14, b: 0.175, eta: 0.91 },
+    output: 'v_e',
+    expected: [10600, 'km/s'],
+    tolerance: 5e-3,
+    provenance: 'published',
+    source:
+      'Project Daedalus first stage, http://crowlspace.com/?m=201208; jet efficiency JBIS 78 (abstract); burn fraction from memory',
+  },
+  {
+    id: 'M10-11',
+    method: 'fusion-exhaust-speed',
+    inputs: { q: 0.003918240267 * 299_792_458 ** 2, b: 1, eta: 1 },
+    output: 'w',
+    expected: [0.0884371411104878, 'c'],
+    tolerance: 1e-6,
+    provenance: 'computed',
+    source: 'Energy and momentum balance root against sqrt(2f − f²)',
+  },
+  {
+    id: 'M10-13',
+    method: 'fusion-exhaust-speed',
+    inputs: { q: 3.52e14, b: 0.1, f_c: 0.95, eta: 0.8, d: 9 },
+    output: 'v_e',
+    expected: 2313093.16716815,
+    tolerance: 1e-6,
+    provenance: 'arithmetic',
+    source: 'sqrt(2 × 0.8 × 0.95 × 0.1 × 3.52e14/10)',
+  },
+];
