@@ -11,6 +11,9 @@ import type { Database } from './platform/database';
 import type { Logger } from './platform/logger';
 import type { PasswordHasher } from './platform/password-hashing';
 import type { Secrets } from './platform/secrets';
+import type { EditService } from './study/edit-service';
+import type { Standpoints } from './study/standpoints';
+import type { StudyStore } from './study/study-store';
 
 /** What handlers work with; made once at start-up and passed in every call. */
 export interface Services extends Database {
@@ -27,4 +30,10 @@ export interface Services extends Database {
   readonly streams: LiveStreams;
   readonly ledgerFeed: LedgerFeed;
   readonly background: BackgroundWork;
+  /** Studies in memory, validated by their revision. */
+  readonly studies: StudyStore;
+  /** The one way in for changes. */
+  readonly edits: EditService;
+  /** The one way out for reads. */
+  readonly standpoints: Standpoints;
 }

@@ -29,6 +29,7 @@ export async function startServices(config: Config, logger: Logger, database: Da
   mailSender.start();
   const passwords = new PasswordHasher(config.passwordHashing);
   const ledgerFeed = new LedgerTableFeed(sequelize);
+  const studies = new StudyStore(sequelize);
   return {
     ...database,
     config,
@@ -43,6 +44,9 @@ export async function startServices(config: Config, logger: Logger, database: Da
     ledgerFeed,
     streams: new LiveStreams(revisions, ledgerFeed, logger),
     background: new BackgroundWork(logger),
+    studies,
+    edits: new EditService(studies),
+    standpoints: new Standpoints(studies, sequelize),
   };
 }
 
