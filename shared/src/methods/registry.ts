@@ -49,6 +49,13 @@ import { propellantForDeltaV, propellantForDeltaVExhaustSpeed } from './rocket/p
 import { propellantLoad } from './rocket/propellant-load';
 import { rocketEquation, rocketEquationExhaustSpeed } from './rocket/rocket-equation';
 import { specificImpulse } from './rocket/specific-impulse';
+import { accelerationDistance, beamDiffraction, beamedSail } from './sail/beamed-sail';
+import { sailTemperature } from './sail/sail-temperature';
+import { irradianceAtDistance, lightPressure, solarSailLoading } from './sail/solar-sail';
+import { circularOrbit, escapeDeltaV } from './transfer/escape';
+import { biellipticTransfer, hohmannTransfer } from './transfer/hohmann';
+import { edelbaumTransfer } from './transfer/low-thrust';
+import { planeAngle, planeChange } from './transfer/plane-change';
 import { accelerateOverDistance, constantAcceleration } from './trip/constant-acceleration';
 import { flipAndBurn, tripWithCruise } from './trip/flip-and-burn';
 import type { Method } from './types';
@@ -122,6 +129,20 @@ export const METHODS: readonly Method[] = [
   deuteriumNeutronBranch,
   deuteriumProtonBranch,
   fuelSpecificEnergy,
+  beamedSail,
+  beamDiffraction,
+  accelerationDistance,
+  sailTemperature,
+  lightPressure,
+  solarSailLoading,
+  irradianceAtDistance,
+  escapeDeltaV,
+  circularOrbit,
+  hohmannTransfer,
+  biellipticTransfer,
+  edelbaumTransfer,
+  planeChange,
+  planeAngle,
   interstellarHeating,
   dustImpact,
   massRollUp,

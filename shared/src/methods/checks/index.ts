@@ -6,6 +6,7 @@ import { MASS_CHECKS } from './masses';
 import { NOZZLE_CHECKS } from './nozzles';
 import { RADIATOR_CHECKS } from './radiators';
 import { ROCKET_CHECKS } from './rockets';
+import { SAIL_AND_TRANSFER_CHECKS } from './sails-and-transfers';
 import { TRIP_CHECKS } from './trips';
 
 /** Every reference value that the tests of this build compare with the library. */
@@ -17,5 +18,6 @@ export const METHOD_CHECKS: readonly Check[] = [
   ...RADIATOR_CHECKS,
   ...HEAT_AND_FUSION_CHECKS,
   ...ANNIHILATION_CHECKS,
+  ...SAIL_AND_TRANSFER_CHECKS,
   ...MASS_CHECKS,
 ];

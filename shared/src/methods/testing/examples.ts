@@ -53,6 +53,16 @@ const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
   'heat-sink-storage': [{ m: 50, c_p: 900, T_1: 300, T_2: 900, Q: 1e3, m_L: 20, L: 4e5 }],
   'fusion-energy-d-d-p': [{ m: 3 }],
   'fuel-specific-energy': [{ Q: 8.7 * 1.602176634e-13, m_1: 1.6726e-27, m_2: 1.82767e-26 }],
+  'light-pressure': [{ S: 1361, A: 900, r: 0.85, theta: 0.4, eps_f: 0.05, eps_b: 0.6 }],
+  'beamed-sail': [{ P: 6.5e10, m: 1000, r: 0.8, alpha: 0.1, v: 0.1 * LIGHT }],
+  'beam-diffraction': [{ lambda: 1e-6, L: 4e13, D: 1e6 }],
+  'acceleration-distance': [{ v: 2e6, a: 0.36 }],
+  'irradiance-at-distance': [{ d: 1.4959787e11 }],
+  'bielliptic-transfer': [{ mu: 3.986e14, r_1: 7e6, r_b: 2.1e8, r_2: 1.05e8, R_b: 6378137 }],
+  'edelbaum-transfer': [{ mu: 3.986e14, a_0: 7e6, a_f: 4.2e7, di: 2.5, f: 1e-4 }],
+  'plane-change': [{ v_1: 1600, v_2: 3070, di: 0.5 }],
+  'plane-angle': [{ i_1: 0.9, i_2: 0.4, dO: 1.1 }],
+  'circular-orbit': [{ mu: 3.986e14, r: 7e6 }],
 };
 
 function collect(): Record<string, Readonly<Record<string, number>>[]> {
