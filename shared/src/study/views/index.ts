@@ -21,3 +21,4 @@ export * from './proof-view';
 export * from './turning-points';
 export * from './requirement-sheet';
 export * from './compliance-view';
+export * from './overview-view';
