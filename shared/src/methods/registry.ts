@@ -52,6 +52,15 @@ import { specificImpulse } from './rocket/specific-impulse';
 import { accelerationDistance, beamDiffraction, beamedSail } from './sail/beamed-sail';
 import { sailTemperature } from './sail/sail-temperature';
 import { irradianceAtDistance, lightPressure, solarSailLoading } from './sail/solar-sail';
+import { axialBuckling, cylinderBuckling, endBuckling, sphereBuckling } from './tank/buckling';
+import {
+  allowableStressMethod,
+  cylindricalShellMass,
+  cylindricalTankWall,
+  ellipsoidalEnds,
+  sphericalTank,
+} from './tank/shells';
+import { boilOff, performanceFactorTank, tankVolume } from './tank/volume';
 import { circularOrbit, escapeDeltaV } from './transfer/escape';
 import { biellipticTransfer, hohmannTransfer } from './transfer/hohmann';
 import { edelbaumTransfer } from './transfer/low-thrust';
@@ -145,6 +154,18 @@ export const METHODS: readonly Method[] = [
   planeAngle,
   interstellarHeating,
   dustImpact,
+  endBuckling,
+  cylinderBuckling,
+  sphereBuckling,
+  axialBuckling,
+  sphericalTank,
+  cylindricalTankWall,
+  cylindricalShellMass,
+  ellipsoidalEnds,
+  allowableStressMethod,
+  tankVolume,
+  boilOff,
+  performanceFactorTank,
   massRollUp,
   massMargins,
 ];

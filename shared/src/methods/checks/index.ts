@@ -7,6 +7,7 @@ import { NOZZLE_CHECKS } from './nozzles';
 import { RADIATOR_CHECKS } from './radiators';
 import { ROCKET_CHECKS } from './rockets';
 import { SAIL_AND_TRANSFER_CHECKS } from './sails-and-transfers';
+import { TANK_CHECKS } from './tanks';
 import { TRIP_CHECKS } from './trips';
 
 /** Every reference value that the tests of this build compare with the library. */
@@ -19,5 +20,6 @@ export const METHOD_CHECKS: readonly Check[] = [
   ...HEAT_AND_FUSION_CHECKS,
   ...ANNIHILATION_CHECKS,
   ...SAIL_AND_TRANSFER_CHECKS,
+  ...TANK_CHECKS,
   ...MASS_CHECKS,
 ];

@@ -63,6 +63,16 @@ const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
   'plane-change': [{ v_1: 1600, v_2: 3070, di: 0.5 }],
   'plane-angle': [{ i_1: 0.9, i_2: 0.4, dO: 1.1 }],
   'circular-orbit': [{ mu: 3.986e14, r: 7e6 }],
+  'boil-off': [{ Q_l: 30, h_fg: 446e3, m: 20e3, t: 8.64e6 }],
+  'performance-factor-tank': [{ p: 1e7, f_b: 1.5, V: 2, phi_t: 14e3 }],
+  'spherical-tank': [{ p: 3e5, V: 100, rho: 2700, s: 2e8, e_w: 0.9, k_f: 1.2 }],
+  'allowable-stress': [{ s_u: 4.5e8, f_u: 1.4, s_y: 4e8, f_y: 1.1 }],
+  'cylinder-buckling': [
+    { a: 1, l: 2, t: 0.004, E: 7e10 },
+    { a: 1, l: 200, t: 0.004, E: 7e10 },
+  ],
+  'sphere-buckling': [{ a: 1, t: 0.003, E: 7e10 }],
+  'axial-buckling': [{ a: 1, l: 2, t: 0.004, E: 7e10, p: 2e5 }],
 };
 
 function collect(): Record<string, Readonly<Record<string, number>>[]> {
