@@ -74,7 +74,9 @@ export class Names {
 
   /** All names of a kind, in order of creation. */
   all(kind: EntityKind): string[] {
-    return [...this.ids.keys()].filter((label) => label.startsWith(`${kind} `)).map((label) => label.slice(kind.length + 1));
+    return [...this.ids.keys()]
+      .filter((label) => label.startsWith(`${kind} `))
+      .map((label) => label.slice(kind.length + 1));
   }
 
   private current(): Study {

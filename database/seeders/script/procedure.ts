@@ -25,7 +25,13 @@ export const lower =
 
 /** Takes a baseline of requirements and puts quantities under control. */
 export const baseline =
-  (words: { name: string; review: string; note: string; requirements: readonly string[]; quantities: readonly string[] }): Phrase =>
+  (words: {
+    name: string;
+    review: string;
+    note: string;
+    requirements: readonly string[];
+    quantities: readonly string[];
+  }): Phrase =>
   (names) => [
     {
       type: 'baseline.take',
@@ -43,7 +49,10 @@ export const baseline =
 export const departure =
   (
     name: string,
-    words: Pick<Departure, 'kind' | 'class' | 'title' | 'reason' | 'effectivity'> & { requirement: string; expires: string | null },
+    words: Pick<Departure, 'kind' | 'class' | 'title' | 'reason' | 'effectivity'> & {
+      requirement: string;
+      expires: string | null;
+    },
   ): Phrase =>
   (names) => {
     const { requirement, ...fields } = words;
@@ -66,7 +75,14 @@ export const change =
   (names) => {
     const edits = proposal(words.edits, names);
     return [
-      { type: 'change.write', id: names.create('change', name), title: words.title, reason: words.reason, due: words.due, edits },
+      {
+        type: 'change.write',
+        id: names.create('change', name),
+        title: words.title,
+        reason: words.reason,
+        due: words.due,
+        edits,
+      },
     ];
   };
 

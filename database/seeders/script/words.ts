@@ -18,7 +18,15 @@ export const settings =
 export const policy =
   (parameter: string, percent: number, definition: string, source: string): Phrase =>
   (names) => [
-    { type: 'policy.create', id: names.create('policy', parameter), parameter, maturity: 'concept', percent, definition, source },
+    {
+      type: 'policy.create',
+      id: names.create('policy', parameter),
+      parameter,
+      maturity: 'concept',
+      percent,
+      definition,
+      source,
+    },
   ];
 
 /** An element of the product tree. */
@@ -130,7 +138,8 @@ export const requirement =
       });
     }
     if (words.budget) commands.push({ type: 'budget.set', ...names.target('requirement', key), budget: words.budget });
-    if (words.share) commands.push({ type: 'budget.adopt', ...names.target('trace', `${words.parents?.[0]} → ${key}`) });
+    if (words.share)
+      commands.push({ type: 'budget.adopt', ...names.target('trace', `${words.parents?.[0]} → ${key}`) });
     return commands;
   };
 
@@ -148,7 +157,11 @@ export const propose =
 export const revisedLimit =
   (key: string, text: string, statement: string): Phrase =>
   (names) => [
-    { type: 'requirement.revise', ...names.target('requirement', key), changes: { limit: limit(text), text: statement } },
+    {
+      type: 'requirement.revise',
+      ...names.target('requirement', key),
+      changes: { limit: limit(text), text: statement },
+    },
   ];
 
 /** Bindings by input name: "isp" is a quantity, "roll-up.m" an output of an analysis, "$sigma" a constant. */
@@ -187,7 +200,10 @@ function analysis(kind: 'formula' | 'method' | 'external', name: string, words: 
 
 /** An analysis by formulas; each line is [name, expression, unit, label]. */
 export const formula =
-  (name: string, words: AnalysisWords & { inputs: Inputs; lines: readonly (readonly [string, string, string, string])[] }): Phrase =>
+  (
+    name: string,
+    words: AnalysisWords & { inputs: Inputs; lines: readonly (readonly [string, string, string, string])[] },
+  ): Phrase =>
   (names) => [
     {
       ...analysis('formula', name, words, names),
@@ -202,12 +218,19 @@ export const method =
   (names) => {
     const version = newestVersion(id);
     if (!version) throw new Error(`the library has no method ${id}`);
-    return [{ ...analysis('method', name, words, names), inputs: bindings(words.inputs, names), method: { id, version } }];
+    return [
+      { ...analysis('method', name, words, names), inputs: bindings(words.inputs, names), method: { id, version } },
+    ];
   };
 
 /** Results brought in from outside. */
 export const external =
-  (name: string, words: AnalysisWords & { results: readonly { name: string; label: string; value: string; u?: string; document: string }[] }): Phrase =>
+  (
+    name: string,
+    words: AnalysisWords & {
+      results: readonly { name: string; label: string; value: string; u?: string; document: string }[];
+    },
+  ): Phrase =>
   (names) => [
     {
       ...analysis('external', name, words, names),
