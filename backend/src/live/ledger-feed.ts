@@ -15,7 +15,8 @@ interface Row {
   readonly by_id: string;
   readonly at: Date;
   readonly summary: string;
-  readonly moved: StudyEvent['moved'] | null;
+  readonly moved: StudyEvent['moved'];
+  readonly touched: string[];
 }
 
 /** Reads the ledger table itself. */
@@ -24,7 +25,9 @@ export class LedgerTableFeed implements LedgerFeed {
 
   async eventsSince(studyId: string, revision: number): Promise<StudyEvent[]> {
     const rows = await this.sequelize.query<Row>(
-      `SELECT l.revision, p.name AS by, l.person_id AS by_id, l.at, l.summary, l.moved
+      `SELECT l.revision, p.name AS by, l.person_id AS by_id, l.at, l.summary, l.moved,
+              ARRAY(SELECT DISTINCT coalesce(e -> 'after' ->> 'key', e -> 'before' ->> 'key', e ->> 'id')
+                      FROM jsonb_array_elements(l.patch) e ORDER BY 1) AS touched
          FROM ledger l LEFT JOIN people p ON p.id = l.person_id
         WHERE l.study_id = $1 AND l.revision > $2 ORDER BY l.revision LIMIT $3`,
       { bind: [studyId, revision, MOST_AT_ONCE], type: QueryTypes.SELECT },
@@ -35,8 +38,8 @@ export class LedgerTableFeed implements LedgerFeed {
       byId: row.by_id,
       at: row.at.toISOString(),
       summary: row.summary,
-      moved: row.moved ?? [],
-      touched: [],
+      moved: row.moved,
+      touched: row.touched,
     }));
   }
 }

@@ -32,6 +32,7 @@ export class MailSender {
   private timer: NodeJS.Timeout | null = null;
   private pass: Promise<void> | null = null;
   private again = false;
+  private stopping = false;
 
   constructor(
     private readonly sequelize: Sequelize,
@@ -58,6 +59,7 @@ export class MailSender {
 
   /** Starts looking into the outbox every few seconds. */
   start(): void {
+    this.stopping = false;
     this.timer = setInterval(() => this.wake(), POLL_MS);
     this.timer.unref();
     this.wake();
@@ -65,11 +67,12 @@ export class MailSender {
 
   /** Looks into the outbox now; called after a transaction that queued a mail. */
   wake(): void {
+    if (this.stopping) return;
     if (this.pass !== null) {
       this.again = true;
       return;
     }
-    this.pass = this.sendAllDue()
+    this.pass = this.sendDue()
       .catch((err: unknown) => this.logger.warn({ err }, 'the outbox could not be worked on'))
       .finally(() => {
         this.pass = null;
@@ -82,14 +85,20 @@ export class MailSender {
 
   /** Stops after the mail that is being sent. */
   async stop(): Promise<void> {
+    this.stopping = true;
     if (this.timer !== null) clearInterval(this.timer);
     this.timer = null;
     while (this.pass !== null) await this.pass;
     this.transport.close();
   }
 
-  private async sendAllDue(): Promise<void> {
-    for (let mail = await this.claim(); mail !== null; mail = await this.claim()) await this.send(mail);
+  /** One pass over the outbox. Leaves nothing that is due, unless it is told to stop meanwhile. */
+  async sendDue(): Promise<void> {
+    while (!this.stopping) {
+      const mail = await this.claim();
+      if (mail === null) return;
+      await this.send(mail);
+    }
   }
 
   private async claim(): Promise<ClaimedMail | null> {

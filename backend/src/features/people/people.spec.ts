@@ -24,7 +24,11 @@ describe('inviting', () => {
   it('makes a person with roles who cannot sign in yet, audited', async () => {
     const { body } = await admin.agent
       .post('/api/people')
-      .send({ name: ' Ivy Invited ', email: 'ivy@example.org', memberships: [{ study: 'petrel', roles: ['analyst', 'reader'] }] })
+      .send({
+        name: ' Ivy Invited ',
+        email: 'ivy@example.org',
+        memberships: [{ study: 'petrel', roles: ['analyst', 'reader'] }],
+      })
       .expect(201);
     expect(body).toEqual({
       id: expect.any(String),
@@ -46,10 +50,22 @@ describe('inviting', () => {
     ['with no address', { ...good, email: 'nora' }, 'email'],
     ['with two addresses', { ...good, email: 'a@example.org, b@example.org' }, 'email'],
     ['with a list hidden in quotes', { ...good, email: '"a@example.org, evil"@example.org' }, 'email'],
-    ['with an unknown role', { ...good, memberships: [{ study: 'petrel', roles: ['owner'] }] }, 'memberships.0.roles.0'],
+    [
+      'with an unknown role',
+      { ...good, memberships: [{ study: 'petrel', roles: ['owner'] }] },
+      'memberships.0.roles.0',
+    ],
     ['with no role in a study', { ...good, memberships: [{ study: 'petrel', roles: [] }] }, 'memberships.0.roles'],
-    ['with a role twice', { ...good, memberships: [{ study: 'petrel', roles: ['reader', 'reader'] }] }, 'memberships.0.roles'],
-    ['into a missing study', { ...good, memberships: [{ study: 'nowhere', roles: ['reader'] }] }, 'memberships.0.study'],
+    [
+      'with a role twice',
+      { ...good, memberships: [{ study: 'petrel', roles: ['reader', 'reader'] }] },
+      'memberships.0.roles',
+    ],
+    [
+      'into a missing study',
+      { ...good, memberships: [{ study: 'nowhere', roles: ['reader'] }] },
+      'memberships.0.study',
+    ],
     ['as administrator by the way', { ...good, administrator: true }, 'administrator'],
     ['with a password', { ...good, passwordHash: 'x' }, 'passwordHash'],
   ])('is refused %s, and nobody is made', async (_name, invitation, field) => {
@@ -59,7 +75,10 @@ describe('inviting', () => {
   });
 
   it('is refused for an address that is here already, in any case', async () => {
-    const { body } = await admin.agent.post('/api/people').send({ ...good, email: 'ADAM.ADMIN@example.org' }).expect(409);
+    const { body } = await admin.agent
+      .post('/api/people')
+      .send({ ...good, email: 'ADAM.ADMIN@example.org' })
+      .expect(409);
     expect(body).toMatchObject({ code: 'conflict', fields: [{ field: 'email', value: 'ADAM.ADMIN@example.org' }] });
   });
 
@@ -193,9 +212,16 @@ describe('the idempotency key of a write', () => {
 
   it('is needed', async () => {
     const address = `/api/studies/petrel/members/${admin.person.id}`;
-    const { body } = await admin.agent.put(address).send({ roles: ['reader'] }).expect(400);
+    const { body } = await admin.agent
+      .put(address)
+      .send({ roles: ['reader'] })
+      .expect(400);
     expect(body.code).toBe('idempotency-key-missing');
-    await admin.agent.put(address).set('Idempotency-Key', '17').send({ roles: ['reader'] }).expect(400);
+    await admin.agent
+      .put(address)
+      .set('Idempotency-Key', '17')
+      .send({ roles: ['reader'] })
+      .expect(400);
   });
 
   it('makes a repetition have one effect and the same answer, also when sent at once', async () => {

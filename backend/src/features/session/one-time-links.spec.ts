@@ -28,7 +28,9 @@ afterEach(() => testApp.services.pool.query('TRUNCATE throttles'));
 async function mailedToken(email: string, subject: RegExp): Promise<string> {
   for (let wait = 0; wait < 100; wait += 1) {
     const { body } = await anybody.get('/api/demo/mail').expect(200);
-    const mail = body.mails.find((kept: { to: string[]; subject: string }) => kept.to[0] === email && subject.test(kept.subject));
+    const mail = body.mails.find(
+      (kept: { to: string[]; subject: string }) => kept.to[0] === email && subject.test(kept.subject),
+    );
     const token = /#([A-Za-z0-9_-]{43})$/m.exec(mail?.text ?? '')?.[1];
     if (token !== undefined) return token;
     await new Promise((resolve) => setTimeout(resolve, 20));
@@ -84,7 +86,9 @@ describe('an invitation', () => {
     expect(Number(validFor.rows[0].hours)).toBe(72);
     await admin.post(`/api/people/${person.id}/invitation`).send().expect(202);
     await accept({ token: first, password: NEW_PASSWORD }).expect(410);
-    await testApp.services.pool.query("UPDATE tokens SET expires_at = now() - interval '1 second' WHERE used_at IS NULL");
+    await testApp.services.pool.query(
+      "UPDATE tokens SET expires_at = now() - interval '1 second' WHERE used_at IS NULL",
+    );
     const second = await mailedToken('slow@example.org', /Invitation/);
     await accept({ token: second, password: NEW_PASSWORD }).expect(410);
   });
