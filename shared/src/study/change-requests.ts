@@ -1,4 +1,4 @@
-import type { ChangeRequest, Command } from '@shared/contract';
+import type { ChangeRequest, Command, EntityKind } from '@shared/contract';
 import type { Study } from './study';
 
 const OPEN: readonly ChangeRequest['state'][] = ['draft', 'submitted', 'in assessment', 'before the board', 'deferred'];
@@ -65,4 +65,11 @@ function targetsOf(study: Study, id: string): string[] {
   if (trace) return [trace.parentId];
   const verification = study.get('verification', id);
   return verification ? [verification.requirementId] : [id];
+}
+
+/** Kind of the entity that an edit of something existing targets. */
+export function targetKind(edit: Command): EntityKind {
+  if (edit.type === 'budget.set') return 'requirement';
+  const [family] = edit.type.split('.');
+  return family === 'budget' ? 'trace' : (family as EntityKind);
 }

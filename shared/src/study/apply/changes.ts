@@ -1,5 +1,5 @@
 import type { ChangeRequest, ChangeState, Command, CommandOf } from '@shared/contract';
-import { classOf, withIds } from '../change-requests';
+import { classOf, targetKind, withIds } from '../change-requests';
 import { type Apply, type ApplyAll, type EditContext, given, nextKey, revised, target } from '../edit-context';
 import { Refusal } from '../refusal';
 import type { Study } from '../study';
@@ -165,21 +165,12 @@ function onCurrentVersions(study: Study, edits: readonly Command[]): Command[] {
       rebased.push(edit);
       continue;
     }
-    const current = study.get(kindOf(edit), edit.id);
+    const current = study.get(targetKind(edit), edit.id);
     if (!current) continue;
     const earlier = rebased.filter((other) => 'version' in other && other.id === edit.id).length;
     rebased.push({ ...edit, version: current.version + earlier } as Command);
   }
   return rebased;
-}
-
-function kindOf(
-  edit: Command,
-): 'study' | 'policy' | 'element' | 'requirement' | 'trace' | 'quantity' | 'analysis' | 'verification' {
-  const [kind] = edit.type.split('.');
-  if (edit.type === 'budget.set') return 'requirement';
-  if (kind === 'budget') return 'trace';
-  return kind as 'requirement';
 }
 
 /** Changes title, reason or due date of a change request that is not before the board yet. */
