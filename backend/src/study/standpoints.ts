@@ -25,6 +25,8 @@ interface Seen {
   readonly revision: number;
   readonly label: string;
   readonly editable: boolean;
+  /** Time and ledger head of a baseline, so that its exports say the same whenever they are made. */
+  readonly frozen?: { readonly at: string; readonly ledgerHead: string };
 }
 
 /**
@@ -57,8 +59,8 @@ export class Standpoints {
         editable: seen.editable,
       },
       revision: current.revision,
-      provedAt: current.provedAt,
-      ledgerHead: current.ledgerHead,
+      provedAt: seen.frozen?.at ?? current.provedAt,
+      ledgerHead: seen.frozen?.ledgerHead ?? current.ledgerHead,
       baseline: await this.baselineInForce(current, seen.revision),
     };
   }
@@ -123,7 +125,9 @@ export class Standpoints {
       proof.study.put('baseline', baseline);
       this.keep(name, proof);
     }
-    return { proof, revision: baseline.revision, label: `Baseline ${key} · ${baseline.name}`, editable: false };
+    const [entry] = await entriesBetween(this.sequelize, current.studyId, baseline.revision - 1, baseline.revision);
+    const frozen = { at: baseline.at, ledgerHead: entry?.digest ?? '' };
+    return { proof, revision: baseline.revision, label: `Baseline ${key} · ${baseline.name}`, editable: false, frozen };
   }
 
   private async seeDraft(current: Current, key: string, study: StudyAccess, person: SignedInPerson): Promise<Seen> {
