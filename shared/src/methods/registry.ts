@@ -1,5 +1,6 @@
 import { annihilationEnergy, annihilationPower } from './annihilation/annihilation-energy';
 import { gammaShield, gammaTransmission, mixtureAttenuation } from './annihilation/gamma-attenuation';
+import { annihilationSplit } from './annihilation/product-split';
 import { shieldHeating } from './annihilation/shield-heating';
 import { kineticEnergy } from './energy/kinetic-energy';
 import {
@@ -40,15 +41,19 @@ import {
   steadySurfaceTemperature,
   surfaceFluxRatio,
 } from './radiator/surface-temperature';
+import { exhaustWithLosses } from './relativistic/exhaust-with-losses';
 import {
   relativisticMassRatio,
   relativisticPropellant,
   relativisticRocketSpeed,
 } from './relativistic/relativistic-rocket';
+import { relativisticStages } from './relativistic/relativistic-stages';
+import { deltaVWithLosses, verticalBurn } from './rocket/losses';
 import { propellantForDeltaV, propellantForDeltaVExhaustSpeed } from './rocket/propellant-for-delta-v';
 import { propellantLoad } from './rocket/propellant-load';
 import { rocketEquation, rocketEquationExhaustSpeed } from './rocket/rocket-equation';
 import { specificImpulse } from './rocket/specific-impulse';
+import { equalStages, stagePayloadFraction, stagedRocket } from './rocket/staging';
 import { accelerationDistance, beamDiffraction, beamedSail } from './sail/beamed-sail';
 import { sailTemperature } from './sail/sail-temperature';
 import { irradianceAtDistance, lightPressure, solarSailLoading } from './sail/solar-sail';
@@ -71,15 +76,22 @@ import type { Method } from './types';
 
 /** Every version of every method, by family. */
 export const METHODS: readonly Method[] = [
+  verticalBurn,
+  deltaVWithLosses,
   propellantForDeltaV,
   propellantForDeltaVExhaustSpeed,
   propellantLoad,
   rocketEquation,
   rocketEquationExhaustSpeed,
   specificImpulse,
+  stagePayloadFraction,
+  equalStages,
+  stagedRocket,
+  exhaustWithLosses,
   relativisticMassRatio,
   relativisticPropellant,
   relativisticRocketSpeed,
+  relativisticStages,
   constantAcceleration,
   accelerateOverDistance,
   flipAndBurn,
@@ -131,6 +143,7 @@ export const METHODS: readonly Method[] = [
   gammaTransmission,
   gammaShield,
   mixtureAttenuation,
+  annihilationSplit,
   shieldHeating,
   fusionExhaustSpeed,
   deuteriumTritium,

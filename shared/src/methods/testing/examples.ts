@@ -73,6 +73,15 @@ const OWN: Readonly<Record<string, Readonly<Record<string, number>>[]>> = {
   ],
   'sphere-buckling': [{ a: 1, t: 0.003, E: 7e10 }],
   'axial-buckling': [{ a: 1, l: 2, t: 0.004, E: 7e10, p: 2e5 }],
+  'delta-v-with-losses': [{ dv_i: 7800, dv_g: 1200, dv_d: 150, dv_s: 50, f: 0.02 }],
+  'staged-rocket': [
+    { m_pl: 5e3, m_p_1: 1e5, m_s_1: 8e3, v_e_1: 2900, m_p_2: 2e4, m_s_2: 2e3, v_e_2: 4400 },
+    { m_pl: 5e3, m_p_1: 1e5, m_s_1: 8e3, v_e_1: 2900 },
+  ],
+  'exhaust-with-losses': [
+    { e_j: 0.6, r_j: 0.2, eta_n: 0.9 },
+    { e_j: 1, r_j: 0, eta_n: 1 },
+  ],
 };
 
 function collect(): Record<string, Readonly<Record<string, number>>[]> {
