@@ -41,29 +41,37 @@ export function percentBase(limit: Limit, temperatureLimit: boolean): { base: nu
   }
 }
 
-/** Signed distance of x from the limit in SI, positive on the good side; within 1e-9 of the limit it is 0. */
-export function marginOf(limit: Limit, x: number): number {
+/** One edge of a limit as x sees it: signed distance in SI, positive on the good side, and the size that "at the edge" is relative to. */
+interface Edge {
+  readonly distance: number;
+  readonly scale: number;
+}
+
+/** The edges of a limit; what lies on the good side of all of them meets it. */
+function edgesOf(limit: Limit, x: number): readonly Edge[] {
   const value = limit.value.si;
+  const below: Edge = { distance: x - value, scale: Math.abs(value) };
   switch (limit.relation) {
     case 'at least':
-      return snapped(x - value, value);
+      return [below];
     case 'at most':
-      return snapped(value - x, value);
+      return [{ distance: value - x, scale: Math.abs(value) }];
     case 'between': {
       const upper = limit.upper?.si ?? value;
-      const low = snapped(x - value, value);
-      const high = snapped(upper - x, upper);
-      return Math.min(low, high);
+      return [below, { distance: upper - x, scale: Math.abs(upper) }];
     }
     case 'equal within': {
       const tolerance = limit.tolerance?.si ?? 0;
-      return snapped(tolerance - Math.abs(x - value), Math.max(Math.abs(value), tolerance));
+      return [{ distance: tolerance - Math.abs(x - value), scale: Math.max(Math.abs(value), tolerance) }];
     }
   }
 }
 
-function snapped(margin: number, scale: number): number {
-  return Math.abs(margin) <= AT_LIMIT * Math.abs(scale) ? 0 : margin;
+/** Signed distance of x from the limit in SI, positive on the good side; within 1e-9 of the limit it is 0. */
+export function marginOf(limit: Limit, x: number): number {
+  return Math.min(
+    ...edgesOf(limit, x).map(({ distance, scale }) => (Math.abs(distance) <= AT_LIMIT * scale ? 0 : distance)),
+  );
 }
 
 /** Margin with its per cent and what the per cent is of. */
@@ -84,13 +92,15 @@ export function marginView(limit: Limit, x: number, temperatureLimit: boolean): 
  * bad side: non-compliant; else indeterminate. Decision rule of this product after JCGM 106 (from memory).
  */
 export function judge(limit: Limit, x: number, expanded: number, required: RequiredMargin | null): Verdict {
-  const margin = marginOf(limit, x);
-  const scale = Math.max(Math.abs(limit.value.si), Math.abs(limit.upper?.si ?? 0));
-  const tolerance = AT_LIMIT * scale;
-  if (margin >= expanded - tolerance) {
-    return required && margin < required.absolute - tolerance ? 'short margin' : 'compliant';
+  const edges = edgesOf(limit, x);
+  // Touching counts through rounding; the edge itself is on the good side.
+  const rounding = ({ scale }: Edge): number => AT_LIMIT * Math.max(scale, expanded);
+  if (edges.every((edge) => edge.distance >= expanded - rounding(edge))) {
+    const short = required && edges.some((edge) => edge.distance < required.absolute - AT_LIMIT * edge.scale);
+    return short ? 'short margin' : 'compliant';
   }
-  return margin < 0 && -margin > expanded ? 'non-compliant' : 'indeterminate';
+  const wrong = edges.some((edge) => -edge.distance > expanded + rounding(edge));
+  return wrong ? 'non-compliant' : 'indeterminate';
 }
 
 /** Compliance that follows from a verdict; a person may lower it, never raise it. */
