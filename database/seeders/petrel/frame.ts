@@ -1,6 +1,6 @@
 import { all, element, policy, settings, type Phrase } from '../script';
+import { ASSUMED } from './sources';
 
-const ASSUMED = 'Study assumption';
 const ESA = 'Study assumption after ESA SRE-PA/2011.097, margin philosophy (contents seen)';
 
 /** Settings, margin policy and product tree of Petrel. */

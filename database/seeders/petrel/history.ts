@@ -23,8 +23,11 @@ import {
 import { powerAnalyses, propulsionAnalyses, unitAnalyses } from './analyses';
 import { frame } from './frame';
 import { missionRequirements, vehicleRequirements } from './mission-requirements';
-import { massQuantities, powerQuantities, vehicleQuantities } from './quantities';
-import { preparedRequirements, systemRequirements, unitRequirements } from './system-requirements';
+import { massQuantities } from './mass-quantities';
+import { powerQuantities } from './power-quantities';
+import { preparedRequirements, systemRequirements } from './system-requirements';
+import { unitRequirements } from './unit-requirements';
+import { vehicleQuantities } from './vehicle-quantities';
 import { findings, missionVerifications, systemVerifications } from './verifications';
 
 const numbered = (prefix: string, count: number): string[] =>
