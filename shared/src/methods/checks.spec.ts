@@ -1,5 +1,5 @@
 import { parseUnit, toSi } from '@shared/units';
-import { METHOD_CHECKS, METHODS, methodById, type Given } from '.';
+import { METHOD_CHECKS, METHODS, methodById, newestVersion, type Given } from '.';
 
 function si(given: Given): number {
   if (typeof given === 'number') return given;
@@ -32,4 +32,19 @@ describe('reference values', () => {
       expect([...method.checks].sort()).toEqual(passed.sort());
     },
   );
+});
+
+describe('registry', () => {
+  it('finds a method by id, by version, and not what is not there', () => {
+    expect(methodById('rocket-equation')?.version).toBe(newestVersion('rocket-equation'));
+    expect(methodById('rocket-equation', '1.0.0')?.id).toBe('rocket-equation');
+    expect(methodById('rocket-equation', '9.9.9')).toBeUndefined();
+    expect(methodById('no-such-method')).toBeUndefined();
+    expect(newestVersion('no-such-method')).toBeUndefined();
+  });
+
+  it('holds each version of a method once', () => {
+    const keys = METHODS.map((method) => `${method.id} ${method.version}`);
+    expect(new Set(keys).size).toBe(keys.length);
+  });
 });

@@ -183,22 +183,23 @@ export const METHODS: readonly Method[] = [
   massMargins,
 ];
 
+/** Versions of each method, oldest first. */
+const byId = new Map<string, Method[]>();
+for (const method of METHODS) byId.set(method.id, [...(byId.get(method.id) ?? []), method].sort(compareVersions));
+
 /** The method with this id: the version asked for, or the newest. */
 export function methodById(id: string, version?: string): Method | undefined {
-  const wanted = version ?? newestVersion(id);
-  return METHODS.find((method) => method.id === id && method.version === wanted);
+  const versions = byId.get(id);
+  return version === undefined ? versions?.at(-1) : versions?.find((method) => method.version === version);
 }
 
 /** The newest version of the method with this id. */
 export function newestVersion(id: string): string | undefined {
-  return METHODS.filter((method) => method.id === id)
-    .map((method) => method.version)
-    .sort(compareVersions)
-    .at(-1);
+  return byId.get(id)?.at(-1)?.version;
 }
 
-function compareVersions(a: string, b: string): number {
-  const [left, right] = [a, b].map((version) => version.split('.').map(Number));
+function compareVersions(a: Method, b: Method): number {
+  const [left, right] = [a, b].map((method) => method.version.split('.').map(Number));
   for (let index = 0; index < 3; index += 1) {
     const difference = (left?.[index] ?? 0) - (right?.[index] ?? 0);
     if (difference !== 0) return difference;
