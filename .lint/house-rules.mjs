@@ -29,12 +29,16 @@ const parts = {
   ],
   'backend/src/exports': ['shared/src', 'backend/src/study', 'backend/src/platform'],
   'backend/src/middleware/problems.ts': ['shared/src'],
-  'backend/src/middleware': ['shared/src', 'backend/src/models', 'backend/src/platform', 'backend/src/services.ts'],
+  'backend/src/middleware': [
+    ...['shared/src', 'backend/src/models', 'backend/src/platform', 'backend/src/services.ts'],
+    'backend/src/middleware/problems.ts',
+  ],
   'backend/src/services.ts': [
     'shared/src',
     'backend/src/study',
     'backend/src/live',
     'backend/src/mail',
+    'backend/src/middleware',
     'backend/src/platform',
   ],
   'backend/src/features': [

@@ -1,6 +1,5 @@
 import express, { type Express } from 'express';
 import { routes as allRoutes } from './features';
-import type { SignedInPerson } from './middleware/access';
 import { clientPages } from './middleware/client-pages';
 import { refuseCrossSite } from './middleware/cross-site';
 import { mountRoutes } from './middleware/mount-routes';
@@ -18,9 +17,9 @@ export function createApp(services: Services, routes: readonly Route[] = allRout
   app.disable('x-powered-by');
   app.set('trust proxy', config.trustedProxies);
   app.use(requestId(logger), ...securityHeaders(config.publicUrl.protocol === 'https:'));
-  app.use('/api', refuseCrossSite(config.publicUrl), sessions(services), authenticator.session());
+  app.use('/api', refuseCrossSite(config.publicUrl), sessions(services), authenticator.readSession);
   app.use('/api', async (request, _response, next) => {
-    const person = request.user as SignedInPerson | undefined;
+    const person = request.user;
     if (person !== undefined) await throttles.countRequest(person.id);
     next();
   });

@@ -12,6 +12,9 @@ import { createLogger } from '../src/platform/logger';
 import type { Services } from '../src/services';
 import { startServices, stopServices } from '../src/start-services';
 
+// Starting an app and signing people in takes long where many processes share two cores; a hang still shows.
+jest.setTimeout(60_000);
+
 /** The address that the app under test believes to have; requests must claim to come from it. */
 export const TEST_ORIGIN = 'http://localhost:4310';
 

@@ -1,8 +1,8 @@
-import type { Role } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
 import { randomUUID } from 'node:crypto';
 import request from 'supertest';
 import { createPerson, type NewPerson } from '../src/features/people/people-service';
-import { Person, Study } from '../src/models';
+import { type Person, Study } from '../src/models';
 import { TEST_ORIGIN, type TestApp } from './app';
 
 /** The password of everybody whom these functions create. */

@@ -1,4 +1,4 @@
-import type { StudyEvent } from '@shared/contract/views';
+import type { StudyEvent } from '@shared/contract';
 import { QueryTypes, type Sequelize } from 'sequelize';
 
 /** Where live streams read what happened in a study after a revision. */

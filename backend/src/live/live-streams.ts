@@ -1,4 +1,4 @@
-import type { StudyEvent } from '@shared/contract/views';
+import type { StudyEvent } from '@shared/contract';
 import type { Response } from 'express';
 import type { Logger } from '../platform/logger';
 import type { LedgerFeed } from './ledger-feed';

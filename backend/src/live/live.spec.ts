@@ -1,4 +1,4 @@
-import type { StudyEvent } from '@shared/contract/views';
+import type { StudyEvent } from '@shared/contract';
 import * as http from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { createTestApp, TEST_ORIGIN, type TestApp } from '../../test/app';

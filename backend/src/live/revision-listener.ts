@@ -2,11 +2,6 @@ import { Client } from 'pg';
 import { QueryTypes, type Sequelize } from 'sequelize';
 import type { Logger } from '../platform/logger';
 
-/** The channel on which a commit of the one path announces `{studyId, revision}`. */
-export const REVISION_CHANNEL = 'study_revision';
-/** The channel on which triggers announce whose sessions or rights have changed. */
-const ACCESS_CHANNEL = 'access_changed';
-
 const SHORTEST_WAIT_MS = 100;
 const LONGEST_WAIT_MS = 5000;
 const PROBE_MS = 30_000;
@@ -79,8 +74,8 @@ export class RevisionListener {
     client.on('end', () => this.reconnectAfter(client));
     try {
       await client.connect();
-      await client.query(`LISTEN ${REVISION_CHANNEL}`);
-      await client.query(`LISTEN ${ACCESS_CHANNEL}`);
+      await client.query('LISTEN study_revision');
+      await client.query('LISTEN access_changed');
       this.client = client;
     } catch (error) {
       await client.end().catch(() => undefined);
@@ -131,7 +126,8 @@ export class RevisionListener {
   }
 
   private hear(channel: string, payload: string): void {
-    if (channel === ACCESS_CHANNEL) {
+    // Triggers announce whose sessions or rights changed; a commit of the one path announces `{studyId, revision}`.
+    if (channel === 'access_changed') {
       for (const callback of [...this.accessCallbacks]) callback(payload);
       return;
     }

@@ -1,4 +1,4 @@
-import type { DemonstrationMail } from '@shared/contract/people';
+import type { DemonstrationMail } from '@shared/contract';
 import { simpleParser } from 'mailparser';
 import type { AddressInfo } from 'node:net';
 import { SMTPServer } from 'smtp-server';

@@ -1,4 +1,4 @@
-import { EmailAddress } from '@shared/contract/people';
+import { EmailAddress } from '@shared/contract';
 import type { Transaction } from 'sequelize';
 import { OutgoingMail } from '../models';
 

@@ -1,5 +1,5 @@
-import type { Role } from '@shared/contract/roles';
-import { ROLES } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
+import { ROLES } from '@shared/contract';
 import { randomUUID } from 'node:crypto';
 import { createTestApp, type TestApp } from '../../test/app';
 import { type Agent, anonymousAgent, createStudy, freshKey, signedInAs } from '../../test/people';

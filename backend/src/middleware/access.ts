@@ -1,4 +1,4 @@
-import type { Role } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
 
 /** Who is signed in, as read from the database for this request. */
 export interface SignedInPerson {

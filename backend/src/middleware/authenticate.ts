@@ -1,4 +1,4 @@
-import type { Request } from 'express';
+import type { Request, RequestHandler, Response } from 'express';
 import { Passport } from 'passport';
 import { Strategy } from 'passport-local';
 import { QueryTypes, type Sequelize } from 'sequelize';
@@ -8,14 +8,24 @@ import { Person } from '../models';
 import type { SignedInPerson } from './access';
 
 declare global {
-  // Express names the type of `request.user` here and nowhere else.
-  // eslint-disable-next-line @typescript-eslint/no-namespace
+  // eslint-disable-next-line @typescript-eslint/no-namespace -- Express names the type of `request.user` here and nowhere else.
   namespace Express {
+    // eslint-disable-next-line @typescript-eslint/no-empty-object-type -- only an interface merges with Express's own.
     interface User extends SignedInPerson {}
   }
 }
 
-export type Authenticator = InstanceType<typeof Passport>;
+/** Signing in and out, and reading who is signed in. */
+export interface Authenticator {
+  /** Puts the person of the request's session, read from the database, on the request. */
+  readonly readSession: RequestHandler;
+  /** The person whose address and password the parsed body holds, or null. */
+  checkPassword(request: Request): Promise<Express.User | null>;
+  /** Starts a new session for the person; the id of the one before is dead. */
+  startSession(request: Request, person: Express.User): Promise<void>;
+  /** Ends the request's session. */
+  endSession(request: Request): Promise<void>;
+}
 
 interface SessionRow extends SignedInPerson {
   readonly over: boolean;
@@ -46,7 +56,26 @@ export function createAuthenticator(
       (error: unknown) => done(error),
     );
   });
-  return passport;
+  return {
+    readSession: passport.session() as RequestHandler,
+    checkPassword: (request) =>
+      settled<Express.User | false | null | undefined>((done) => {
+        const check = passport.authenticate('local', done) as RequestHandler;
+        void check(request, request.res as Response, done);
+      }).then((person) => (person === false ? null : (person ?? null))),
+    startSession: (request, person) => settled((done) => request.logIn(person, done)),
+    endSession: (request) => settled((done) => request.session.destroy(done)),
+  };
+}
+
+/** A promise for what a function reports through a callback of the form (error, result). */
+function settled<T = void>(start: (done: (error?: unknown, result?: T) => void) => void): Promise<T> {
+  return new Promise((resolve, reject) => {
+    start((error, result) => {
+      if (error === null || error === undefined) resolve(result as T);
+      else reject(error instanceof Error ? error : new Error('signing in failed', { cause: error }));
+    });
+  });
 }
 
 /**

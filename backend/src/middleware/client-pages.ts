@@ -18,6 +18,7 @@ export function clientPages(clientDirectory: string): Router {
       .send(page.replaceAll('__NONCE__', nonceOf(response)));
   };
   // index.html must never leave as a plain file: its placeholder would be everybody's nonce.
+
   router.get('/index.html', sendPage);
   router.use(
     express.static(clientDirectory, {
@@ -29,6 +30,7 @@ export function clientPages(clientDirectory: string): Router {
       },
     }),
   );
+
   router.get('/{*path}', sendPage);
   return router;
 }

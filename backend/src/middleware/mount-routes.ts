@@ -29,7 +29,7 @@ export function mountRoutes(routes: readonly Route[], services: Services): Route
 /** Authenticate, permission, parse, handler: the same order for every route. */
 function serve(route: Route, services: Services): RequestHandler {
   return async (request, response) => {
-    const person = (request.user as SignedInPerson | undefined) ?? null;
+    const person = request.user ?? null;
     checkPermission(route.permission, person);
     const study = await studyOf(route, request, person, services);
     const { study: _key, ...pathParams } = request.params as Record<string, string>;

@@ -1,4 +1,4 @@
-import { Problem } from '@shared/contract/problem';
+import { Problem } from '@shared/contract';
 import * as z from 'zod';
 import { needsIdempotencyKey, type Route } from './routes';
 

@@ -1,5 +1,5 @@
-import type { ProblemField } from '@shared/contract/problem';
-import * as z from 'zod';
+import type { ProblemField } from '@shared/contract';
+import type * as z from 'zod';
 import { Invalid } from './problems';
 
 const LONGEST_ECHO = 200;

@@ -1,4 +1,4 @@
-import type { Problem } from '@shared/contract/problem';
+import type { Problem } from '@shared/contract';
 import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
 import type { Logger } from '../platform/logger';
 import { HashingBusy } from '../platform/password-hashing';

@@ -1,4 +1,4 @@
-import type { ProblemCode, ProblemField } from '@shared/contract/problem';
+import type { ProblemCode, ProblemField } from '@shared/contract';
 
 interface ProblemOptions {
   readonly fields?: readonly ProblemField[];

@@ -178,5 +178,5 @@ function isStrict(schema: z.ZodType | undefined): boolean {
     if (alternatives !== undefined) return alternatives.every(closed);
     return part.type === 'object' && part.additionalProperties === false;
   };
-  return closed(z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any', reused: 'inline' }) as ObjectSchema);
+  return closed(z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any', reused: 'inline' }));
 }

@@ -1,4 +1,4 @@
-import type { Role } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
 import { QueryTypes, type Sequelize } from 'sequelize';
 import type { SignedInPerson, StudyAccess, StudyPermission } from './access';
 import { Forbidden, NotFound } from './problems';

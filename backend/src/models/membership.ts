@@ -1,4 +1,4 @@
-import type { Role } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 
 /** The roles of one person in one study; no row means that the study does not exist for that person. */

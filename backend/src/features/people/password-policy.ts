@@ -1,4 +1,4 @@
-import { NewPassword } from '@shared/contract/people';
+import { NewPassword } from '@shared/contract';
 import { Invalid } from '../../middleware/problems';
 
 /** Commonest passwords of at least 8 characters and words of the trade; from memory, in lower case. */

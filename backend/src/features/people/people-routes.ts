@@ -1,11 +1,4 @@
-import {
-  Invitation,
-  MemberRoles,
-  PeopleAnswer,
-  PersonAnswer,
-  PersonChange,
-  StudyMembers,
-} from '@shared/contract/people';
+import { Invitation, MemberRoles, PeopleAnswer, PersonAnswer, PersonChange, StudyMembers } from '@shared/contract';
 import * as z from 'zod';
 import { rememberAnswer } from '../../middleware/idempotency';
 import { Answer, NO_CONTENT, personRoute, type Route, studyRead, studyWrite } from '../../middleware/routes';

@@ -1,5 +1,5 @@
-import type { Invitation, PersonChange } from '@shared/contract/people';
-import type { Role } from '@shared/contract/roles';
+import type { Invitation, PersonChange } from '@shared/contract';
+import type { Role } from '@shared/contract';
 import { type Transaction, UniqueConstraintError } from 'sequelize';
 import { invitationMessage, oneTimeLink } from '../../mail/messages';
 import { queueMail } from '../../mail/outbox';

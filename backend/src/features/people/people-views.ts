@@ -1,5 +1,5 @@
-import type { MembershipAnswer, PeopleAnswer, PersonAnswer, StudyMember } from '@shared/contract/people';
-import type { Role } from '@shared/contract/roles';
+import type { MembershipAnswer, PeopleAnswer, PersonAnswer, StudyMember } from '@shared/contract';
+import type { Role } from '@shared/contract';
 import { QueryTypes, type Sequelize, type Transaction } from 'sequelize';
 import { NotFound } from '../../middleware/problems';
 

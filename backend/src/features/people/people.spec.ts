@@ -1,4 +1,4 @@
-import type { Role } from '@shared/contract/roles';
+import type { Role } from '@shared/contract';
 import { randomUUID } from 'node:crypto';
 import { createTestApp, type TestApp } from '../../../test/app';
 import { type Agent, anonymousAgent, createStudy, freshKey, signedInAgent, signedInAs } from '../../../test/people';

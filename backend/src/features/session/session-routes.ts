@@ -5,7 +5,7 @@ import {
   PasswordResetRequest,
   SessionAnswer,
   SignIn,
-} from '@shared/contract/people';
+} from '@shared/contract';
 import * as z from 'zod';
 import { Answer, NO_CONTENT, personRoute, publicRoute, type Route } from '../../middleware/routes';
 import { sessionCookieName } from '../../middleware/session';
@@ -44,11 +44,7 @@ export const sessionRoutes: readonly Route[] = [
     permission: 'signed-in',
     status: 204,
     handler: async ({ services, request, response }) => {
-      await new Promise<void>((resolve, reject) => {
-        request.session.destroy((error: unknown) =>
-          error === null || error === undefined ? resolve() : reject(error),
-        );
-      });
+      await services.authenticator.endSession(request);
       const { secureCookies } = services.config;
       response.clearCookie(sessionCookieName(secureCookies), {
         path: '/',

@@ -1,4 +1,4 @@
-import type { InvitationAcceptance, OwnSession, SessionAnswer } from '@shared/contract/people';
+import type { InvitationAcceptance, OwnSession, SessionAnswer } from '@shared/contract';
 import type { Request } from 'express';
 import { QueryTypes, type Transaction } from 'sequelize';
 import { oneTimeLink, passwordResetMessage } from '../../mail/messages';
@@ -18,26 +18,13 @@ import { membershipsOf } from '../people/people-views';
 export async function signIn(services: Services, request: Request, email: string): Promise<SessionAnswer> {
   const address = request.ip ?? '';
   await services.throttles.countSignIn(email, address);
-  const person = await checkCredentials(services, request);
+  const person = await services.authenticator.checkPassword(request);
   if (person === null) {
     throw new ProblemError(401, 'sign-in-refused', 'Not signed in', 'The address and the password do not go together.');
   }
   await services.throttles.forgiveSignIn(email, address);
-  // Passport makes a new session here; the id from before is dead.
-  await new Promise<void>((resolve, reject) => {
-    request.logIn(person, (error: unknown) => (error === undefined || error === null ? resolve() : reject(error)));
-  });
+  await services.authenticator.startSession(request, person);
   return sessionAnswer(services, person);
-}
-
-function checkCredentials(services: Services, request: Request): Promise<Express.User | null> {
-  return new Promise((resolve, reject) => {
-    const settle = (error: unknown, person?: Express.User | false | null): void => {
-      if (error !== null && error !== undefined) reject(error);
-      else resolve(person === false || person === undefined ? null : person);
-    };
-    services.authenticator.authenticate('local', settle)(request, request.res, reject);
-  });
 }
 
 /** Who is signed in, with which roles where. */

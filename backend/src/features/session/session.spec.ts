@@ -9,7 +9,7 @@ import {
   signedInAs,
   TEST_PASSWORD,
 } from '../../../test/people';
-import { Person } from '../../models';
+import { type Person } from '../../models';
 
 let testApp: TestApp;
 beforeAll(async () => {
@@ -44,9 +44,7 @@ describe('signing in and out', () => {
 
   it('sees role changes at the next request', async () => {
     const { agent, person } = await signedInAs(testApp, 'Rita', { study: 'petrel', roles: ['analyst'] });
-    await testApp.services.sequelize.query(
-      `UPDATE memberships SET roles = '{reader}' WHERE person_id = '${person.id}'`,
-    );
+    await testApp.services.pool.query("UPDATE memberships SET roles = '{reader}' WHERE person_id = $1", [person.id]);
     expect((await agent.get('/api/session')).body.memberships[0].roles).toEqual(['reader']);
   });
 
@@ -188,11 +186,12 @@ describe('the throttle', () => {
 });
 
 describe('a session', () => {
-  const age = (column: string, minutes: number, person: Person): Promise<unknown> =>
-    testApp.services.pool.query(
-      `UPDATE sessions SET ${column} = now() - make_interval(mins => $1) WHERE person_id = $2`,
-      [minutes, person.id],
-    );
+  const AGEING = {
+    last_seen_at: 'UPDATE sessions SET last_seen_at = now() - make_interval(mins => $1) WHERE person_id = $2',
+    created_at: 'UPDATE sessions SET created_at = now() - make_interval(mins => $1) WHERE person_id = $2',
+  };
+  const age = (column: keyof typeof AGEING, minutes: number, person: Person): Promise<unknown> =>
+    testApp.services.pool.query(AGEING[column], [minutes, person.id]);
 
   it('ends after 30 idle minutes by the database’s clock', async () => {
     const { agent, person } = await signedInAs(testApp, 'Idle');

@@ -1,4 +1,4 @@
-import { About, DemonstrationMails } from '@shared/contract/people';
+import { About, DemonstrationMails } from '@shared/contract';
 import * as z from 'zod';
 import { NotFound } from '../../middleware/problems';
 import { openApiDocument } from '../../middleware/openapi';
