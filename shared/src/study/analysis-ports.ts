@@ -213,12 +213,18 @@ export function checkAnalysis(study: Study, analysis: Analysis): void {
   } else if (analysis.kind === 'method') {
     checkMethodInputs(study, analysis);
   } else {
+    scopeOf(study, analysis);
     if (analysis.results.length === 0) throw invalid('results', '', 'an external analysis needs at least one result.');
     const names = analysis.results.map((result) => result.name);
     const twice = names.find((name, index) => names.indexOf(name) !== index);
     if (twice) throw invalid('results', twice, 'each result name can be used once.');
   }
   refuseCycle(study, analysis);
+}
+
+/** "a temperature" or "a temperature difference", which share a dimension and are kept apart. */
+export function temperatureInWords(temperature: Port['temperature']): string {
+  return temperature === 'difference' ? 'a temperature difference' : 'a temperature';
 }
 
 function checkMethodInputs(study: Study, analysis: Analysis): void {
@@ -243,13 +249,21 @@ function checkMethodInputs(study: Study, analysis: Analysis): void {
         binding.name,
         `${method.name} takes ${ports.map((p) => p.name).join(', ')}.`,
       );
-    const given = scope.get(binding.name)!.dimension;
+    const { dimension: given, temperature } = scope.get(binding.name)!;
     const needed = knownDimension(port.unit);
     if (given !== needed) {
       throw invalid(
         `inputs[${index}].from`,
         sourcePort(study, binding.from)?.key,
         `that is ${a(describeDimension(given))}; ${port.label} (${port.name}) needs ${a(describeDimension(needed))}.`,
+      );
+    }
+    const wanted = tagged(needed, port.temperature);
+    if (wanted !== temperature) {
+      throw invalid(
+        `inputs[${index}].from`,
+        sourcePort(study, binding.from)?.key,
+        `that is ${temperatureInWords(temperature)}; ${port.label} (${port.name}) needs ${temperatureInWords(wanted)}.`,
       );
     }
   });

@@ -8,11 +8,23 @@ export function isOpen(change: ChangeRequest): boolean {
   return OPEN.includes(change.state);
 }
 
-/** Commands that create something, with the identifier they will create it under, so that a draft can be rebuilt identically. */
+/**
+ * Commands that create something, with the identifier they will create it under, so that a draft can be rebuilt
+ * identically; traces that a new requirement brings along become edits of their own for the same reason.
+ */
 export function withIds(edits: readonly Command[], newId: () => string): Command[] {
-  return edits.map((edit) =>
-    'version' in edit || edit.type === 'edit.undo' || edit.id ? edit : ({ ...edit, id: newId() } as Command),
-  );
+  return edits.flatMap((edit) => {
+    if ('version' in edit || edit.type === 'edit.undo') return [edit];
+    const id = edit.id ?? newId();
+    if (edit.type !== 'requirement.create') return [{ ...edit, id } as Command];
+    const traces = [...new Set(edit.parentIds)].map((parentId): Command => ({
+      type: 'trace.link',
+      id: newId(),
+      parentId,
+      childId: id,
+    }));
+    return [{ ...edit, id, parentIds: [] }, ...traces];
+  });
 }
 
 /** Requirement that a proposed edit touches in its limit, trace or budget, if it does. */

@@ -86,6 +86,23 @@ export function referred<K extends EntityKind>(study: Study, kind: K, field: str
   return entity;
 }
 
+/** Identifier of what a command creates: the one it brings, if nothing has it yet, or a new one. */
+export function freshId(
+  study: Study,
+  kind: EntityKind,
+  command: { readonly id?: string | undefined },
+  context: EditContext,
+): string {
+  if (command.id === undefined) return context.newId();
+  if (study.get(kind, command.id))
+    throw new Refusal('invalid', `id: there is already a ${KIND_NAMES[kind]} with this identifier.`, {
+      field: 'id',
+      value: command.id,
+      expected: 'an identifier that is not used yet, or none',
+    });
+  return command.id;
+}
+
 /** Key or name by which an entity is called in sentences. */
 export function labelOf<K extends EntityKind>(study: Study, kind: K, entity: EntityKinds[K]): string {
   if ('key' in entity && typeof entity.key === 'string') return entity.key;

@@ -1,10 +1,11 @@
 import type { Analysis, CommandOf } from '@shared/contract';
 import { describeDimension } from '@shared/units';
-import { checkAnalysis, knownDimension, outputsOf } from '../analysis-ports';
+import { checkAnalysis, knownDimension, outputsOf, temperatureInWords } from '../analysis-ports';
 import { digestOf } from '../digest';
 import {
   type Apply,
   type EditContext,
+  freshId,
   given,
   nextKey,
   referred,
@@ -35,11 +36,11 @@ function readResults(results: Fields['results']): Analysis['results'] {
 
 /** Adds an analysis, after checking names, formulas, dimensions and circles. */
 export const createAnalysis: Apply<'analysis.create'> = (study, command, context) => {
-  const { type: _type, id, results, ...fields } = command;
+  const { type: _type, id: _id, results, ...fields } = command;
   if (fields.elementId) referred(study, 'element', 'elementId', fields.elementId);
   const analysis: Analysis = {
     ...fields,
-    id: id ?? context.newId(),
+    id: freshId(study, 'analysis', command, context),
     version: 1,
     key: nextKey(study, 'AN'),
     results: readResults(results),
@@ -83,7 +84,7 @@ export const reviseAnalysis: Apply<'analysis.revise'> = (study, command, context
 };
 
 /** Refuses a revision that takes away, or turns into another dimension, an output that something rests on. */
-function refuseBrokenUsers(study: Study, before: Analysis, after: Analysis): void {
+export function refuseBrokenUsers(study: Study, before: Analysis, after: Analysis): void {
   const old = new Map(outputsOf(study, before).map((port) => [port.name, port]));
   const now = new Map(outputsOf(study, after).map((port) => [port.name, port]));
   const uses: [string, string][] = [];
@@ -109,6 +110,13 @@ function refuseBrokenUsers(study: Study, before: Analysis, after: Analysis): voi
         'changes.lines',
         output,
         `${user} rests on ${output} as ${a(describeDimension(was.dimension))}; it would become ${a(describeDimension(is.dimension))}.`,
+      );
+    }
+    if (was && is.temperature !== was.temperature) {
+      throw invalid(
+        'changes.lines',
+        output,
+        `${user} rests on ${output} as ${temperatureInWords(was.temperature)}; it would become ${temperatureInWords(is.temperature)}.`,
       );
     }
   }

@@ -52,10 +52,12 @@ export function assessmentCommands(facts: (requirementId: string) => RowFacts) {
         { field: 'id', value: requirement.key, expected: 'a baselined requirement' },
       );
     const row = facts(requirement.id);
-    if (row.compliance !== 'yes' && !row.departed) {
+    const lowered = study.find('assessment', 'requirementId', requirement.id)[0]?.lowered?.to;
+    const compliance = lowered && lowers(row.compliance, lowered) ? lowered : row.compliance;
+    if (compliance !== 'yes' && !row.departed) {
       throw new Refusal(
         'state',
-        `${requirement.key} is ${row.verdict}; its row closes when it complies, or with a departure in force.`,
+        `${requirement.key} is ${row.verdict}${lowered ? `, lowered to ${lowered}` : ''}; its row closes when it complies, or with a departure in force.`,
         { field: 'id', value: requirement.key, expected: 'compliance yes, or a departure in force' },
       );
     }
@@ -70,7 +72,10 @@ export function assessmentCommands(facts: (requirementId: string) => RowFacts) {
       .map((trace) => study.get('requirement', trace.childId))
       .find(
         (child) =>
-          child && child.state !== 'withdrawn' && !study.find('assessment', 'requirementId', child.id)[0]?.closed,
+          child &&
+          child.state !== 'withdrawn' &&
+          // A closed row whose signature no longer covers what stands has reopened by itself.
+          study.find('assessment', 'requirementId', child.id)[0]?.closed?.digest !== facts(child.id).digest,
       );
     if (openChild)
       throw new Refusal('state', `${requirement.key} cannot be closed over ${openChild.key}, which is still open.`, {

@@ -1,5 +1,5 @@
 import type { Baseline } from '@shared/contract';
-import { type Apply, nextKey, referred, revised } from '../edit-context';
+import { type Apply, freshId, nextKey, referred, revised } from '../edit-context';
 import { Refusal, invalid } from '../refusal';
 
 /**
@@ -29,7 +29,7 @@ export const takeBaseline: Apply<'baseline.take'> = (study, command, context) =>
     if (quantity.state !== 'controlled') revised(study, 'quantity', quantity, { state: 'controlled' });
   }
   const baseline: Baseline = {
-    id: command.id ?? context.newId(),
+    id: freshId(study, 'baseline', command, context),
     version: 1,
     key: nextKey(study, 'B'),
     name: command.name,

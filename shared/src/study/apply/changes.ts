@@ -1,6 +1,6 @@
 import type { ChangeRequest, ChangeState, Command, CommandOf } from '@shared/contract';
 import { classOf, targetKind, withIds } from '../change-requests';
-import { type Apply, type ApplyAll, type EditContext, given, nextKey, revised, target } from '../edit-context';
+import { type Apply, type ApplyAll, type EditContext, freshId, given, nextKey, revised, target } from '../edit-context';
 import { Refusal } from '../refusal';
 import type { Study } from '../study';
 
@@ -35,7 +35,7 @@ export function changeCommands(applyAll: ApplyAll) {
     const edits = withIds(command.edits, context.newId);
     tryEdits(study, edits, context);
     const change: ChangeRequest = {
-      id: command.id ?? context.newId(),
+      id: freshId(study, 'change', command, context),
       version: 1,
       key: nextKey(study, 'CR'),
       title: command.title,
@@ -70,7 +70,7 @@ export function changeCommands(applyAll: ApplyAll) {
         value: String(command.index),
         expected: `0 to ${change.edits.length - 1}`,
       });
-    const edits = change.edits.filter((_edit, index) => index !== command.index);
+    const edits = withoutEdit(change.edits, command.index);
     revised(study, 'change', change, { edits, class: classOf(study, edits) });
   };
 
@@ -90,11 +90,23 @@ export function changeCommands(applyAll: ApplyAll) {
         value: '',
         expected: 'at least one edit',
       });
-    tryEdits(study, change.edits, context);
+    orConflict(change, () => tryEdits(study, change.edits, context));
     revised(study, 'change', change, {
       state: change.state === 'deferred' ? 'in assessment' : 'submitted',
       votes: [],
       disposition: null,
+    });
+  };
+
+  /** Proposed edits on the versions that their targets have now, each tried; edits whose target is gone are dropped. */
+  const onCurrentVersions = (study: Study, edits: readonly Command[], context: EditContext): Command[] => {
+    const fork = study.fork();
+    return edits.flatMap((edit) => {
+      const current = 'version' in edit ? fork.get(targetKind(edit), edit.id) : undefined;
+      if ('version' in edit && !current) return [];
+      const rebased = current ? ({ ...edit, version: current.version } as Command) : edit;
+      applyAll(fork, [rebased], context);
+      return [rebased];
     });
   };
 
@@ -106,8 +118,7 @@ export function changeCommands(applyAll: ApplyAll) {
       ['draft', 'submitted', 'in assessment', 'before the board', 'deferred'],
       'resolving a conflict',
     );
-    const edits = onCurrentVersions(study, change.edits);
-    tryEdits(study, edits, context);
+    const edits = onCurrentVersions(study, change.edits, { ...context, authority: 'proposal' });
     // What the board assessed was something else: it starts again.
     const state = change.state === 'draft' || change.state === 'deferred' ? change.state : 'submitted';
     revised(study, 'change', change, { edits, votes: [], state });
@@ -141,7 +152,9 @@ export function changeCommands(applyAll: ApplyAll) {
         });
       }
       // Versions are those the author saw: what has moved since makes the whole approval fail, and nothing is applied.
-      applyAll(study, change.edits, { ...context, actorId: change.authorId, authority: 'board' });
+      orConflict(change, () =>
+        applyAll(study, change.edits, { ...context, actorId: change.authorId, authority: 'board' }),
+      );
     }
     revised(study, 'change', change, {
       state: command.decision,
@@ -152,25 +165,29 @@ export function changeCommands(applyAll: ApplyAll) {
   return { write, amend, drop, submit, rebase, dispose };
 }
 
-/** Proposed edits with the versions that their targets have now; edits whose target is gone are dropped. */
-function onCurrentVersions(study: Study, edits: readonly Command[]): Command[] {
-  const rebased: Command[] = [];
-  for (const edit of edits) {
-    if (!('version' in edit)) {
-      rebased.push(edit);
-      continue;
-    }
-    // What the draft itself creates has no version outside it: those edits stay as written.
-    if (edits.some((other) => !('version' in other) && 'id' in other && other.id === edit.id)) {
-      rebased.push(edit);
-      continue;
-    }
-    const current = study.get(targetKind(edit), edit.id);
-    if (!current) continue;
-    const earlier = rebased.filter((other) => 'version' in other && other.id === edit.id).length;
-    rebased.push({ ...edit, version: current.version + earlier } as Command);
+/** Says of an edit on something that has moved, or is gone, that the request is in conflict, and which edit it is. */
+function orConflict(change: ChangeRequest, apply: () => void): void {
+  try {
+    apply();
+  } catch (error) {
+    if (!(error instanceof Refusal) || (error.code !== 'stale' && error.code !== 'not-found')) throw error;
+    const edit = (error.command ?? 0) + 1;
+    throw new Refusal(
+      'conflict',
+      `${change.key} is in conflict: what its edit ${edit} changes has moved since it was written. Its author resolves that first. ${error.message}`,
+      { ...error.details, field: 'edits' },
+    );
   }
-  return rebased;
+}
+
+/** The edits but for one; later edits of the same thing were written to follow on from it and step back by one version. */
+function withoutEdit(edits: readonly Command[], dropped: number): Command[] {
+  const gone = edits[dropped];
+  return edits.flatMap((edit, index) => {
+    if (index === dropped) return [];
+    const follows = index > dropped && gone && 'version' in gone && 'version' in edit && edit.id === gone.id;
+    return [follows ? ({ ...edit, version: Math.max(1, edit.version - 1) } as Command) : edit];
+  });
 }
 
 /** Changes title, reason or due date of a change request that is not before the board yet. */

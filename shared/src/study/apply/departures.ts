@@ -1,10 +1,10 @@
 import type { Departure } from '@shared/contract';
-import { type Apply, nextKey, referred, revised, target } from '../edit-context';
+import { type Apply, freshId, nextKey, referred, revised, target } from '../edit-context';
 import { Refusal, invalid } from '../refusal';
 
 /** Asks for permission not to meet a requirement; it must be limited in time or to items. */
 export const requestDeparture: Apply<'departure.request'> = (study, command, context) => {
-  const { type: _type, id, ...fields } = command;
+  const { type: _type, id: _id, ...fields } = command;
   const requirement = referred(study, 'requirement', 'requirementId', fields.requirementId);
   if (requirement.state !== 'baselined')
     throw invalid(
@@ -16,7 +16,7 @@ export const requestDeparture: Apply<'departure.request'> = (study, command, con
     throw invalid('effectivity', '', 'limit the departure to items, or give the day it expires.');
   const departure: Departure = {
     ...fields,
-    id: id ?? context.newId(),
+    id: freshId(study, 'departure', command, context),
     version: 1,
     key: nextKey(study, fields.kind === 'deviation' ? 'DEV' : 'WAV'),
     state: 'requested',

@@ -5,6 +5,7 @@ import { boundsOf, knownDimension } from '../analysis-ports';
 import {
   type Apply,
   type EditContext,
+  freshId,
   given,
   nextKey,
   referred,
@@ -18,12 +19,12 @@ import type { Study } from '../study';
 
 /** Adds a quantity with its unit, and its value if it has one. */
 export const createQuantity: Apply<'quantity.create'> = (study, command, context) => {
-  const { type: _type, id, value, uncertainty, ...fields } = command;
+  const { type: _type, id: _id, value, uncertainty, ...fields } = command;
   if (fields.elementId) referred(study, 'element', 'elementId', fields.elementId);
   const dimension = unitDimension('unit', fields.unit);
   const quantity: Quantity = {
     ...fields,
-    id: id ?? context.newId(),
+    id: freshId(study, 'quantity', command, context),
     version: 1,
     key: nextKey(study, 'Q'),
     value: value ? readMeasure('value', value, dimension, fields.temperature) : null,

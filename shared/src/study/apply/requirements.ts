@@ -1,8 +1,9 @@
-import type { CommandOf, Requirement, Trace } from '@shared/contract';
-import { knownDimension, outputsOf } from '../analysis-ports';
+import type { CommandOf, Limit, Requirement, Trace } from '@shared/contract';
+import { isTemperature, knownDimension, outputsOf, temperatureInWords } from '../analysis-ports';
 import {
   type Apply,
   type EditContext,
+  freshId,
   given,
   nextKey,
   referred,
@@ -18,7 +19,7 @@ import { describeDimension } from '@shared/units';
 
 /** Writes a new requirement in preparation, with its key and its traces to parents. */
 export const createRequirement: Apply<'requirement.create'> = (study, command, context) => {
-  const { type: _type, id, prefix, parentIds, limit, ...fields } = command;
+  const { type: _type, id: _id, prefix, parentIds, limit, ...fields } = command;
   const element = fields.elementId ? referred(study, 'element', 'elementId', fields.elementId) : undefined;
   const keyPrefix = prefix ?? element?.key;
   if (!keyPrefix)
@@ -27,7 +28,7 @@ export const createRequirement: Apply<'requirement.create'> = (study, command, c
   refuseUnknownLevel(study, fields.level);
   const requirement: Requirement = {
     ...fields,
-    id: id ?? context.newId(),
+    id: freshId(study, 'requirement', command, context),
     version: 1,
     key: nextKey(study, keyPrefix),
     limit: readLimit('limit', limit),
@@ -37,16 +38,26 @@ export const createRequirement: Apply<'requirement.create'> = (study, command, c
     state: 'in preparation',
   };
   study.put('requirement', requirement);
-  for (const parentId of parentIds) {
-    referred(study, 'requirement', 'parentIds', parentId);
+  for (const parentId of new Set(parentIds)) {
+    refuseWithdrawnParent(referred(study, 'requirement', 'parentIds', parentId), 'parentIds');
     study.put('trace', { id: context.newId(), version: 1, parentId, childId: requirement.id, share: 'none' });
   }
 };
 
+function refuseWithdrawnParent(parent: Requirement, field: string): void {
+  if (parent.state === 'withdrawn')
+    throw new Refusal('state', `${parent.key} is withdrawn; nothing is flowed down from it.`, {
+      field,
+      value: parent.key,
+      expected: 'a parent in force',
+    });
+}
+
 const RESERVED_PREFIXES = ['CR', 'B', 'Q', 'AN', 'DEV', 'WAV'];
-function refuseReservedPrefix(prefix: string): void {
+/** Refuses a key prefix, or the code of an element, that keys of other things begin with. */
+export function refuseReservedPrefix(prefix: string, field = 'prefix'): void {
   if (RESERVED_PREFIXES.includes(prefix))
-    throw invalid('prefix', prefix, `${RESERVED_PREFIXES.join(', ')} are used for other things; choose another.`);
+    throw invalid(field, prefix, `${RESERVED_PREFIXES.join(', ')} are used for other things; choose another.`);
 }
 
 function refuseUnknownLevel(study: Study, level: string): void {
@@ -91,7 +102,7 @@ export const reviseRequirement: Apply<'requirement.revise'> = (study, command, c
   const changes: Partial<Requirement> = given(rest);
   const next: Partial<Requirement> =
     limit === undefined ? changes : { ...changes, limit: readLimit('changes.limit', limit) };
-  if (next.limit) refuseOtherDimension(study, requirement, next.limit.value.unit);
+  if (next.limit) refuseOtherDimension(study, requirement, next.limit);
   if (next.limit === null && requirement.budget)
     throw invalid(
       'changes.limit',
@@ -101,7 +112,8 @@ export const reviseRequirement: Apply<'requirement.revise'> = (study, command, c
   revised(study, 'requirement', requirement, next);
 };
 
-function refuseOtherDimension(study: Study, requirement: Requirement, unit: string): void {
+function refuseOtherDimension(study: Study, requirement: Requirement, limit: Limit): void {
+  const { unit } = limit.value;
   const dimension = knownDimension(unit);
   for (const verification of study.find('verification', 'requirementId', requirement.id)) {
     const analysis = verification.analysisId ? study.get('analysis', verification.analysisId) : undefined;
@@ -111,6 +123,14 @@ function refuseOtherDimension(study: Study, requirement: Requirement, unit: stri
         'changes.limit.value',
         unit,
         `${requirement.key} is verified by ${analysis.key} ${output.name}, which is ${a(describeDimension(output.dimension))}; unlink it first or keep the limit in that dimension.`,
+      );
+    }
+    const known = analysis && analysis.kind !== 'external' && isTemperature(dimension);
+    if (known && output && output.temperature !== limit.temperature) {
+      throw invalid(
+        'changes.limit.temperature',
+        limit.temperature,
+        `${requirement.key} is verified by ${analysis.key} ${output.name}, which is ${temperatureInWords(output.temperature)}; unlink it first or keep the limit on that.`,
       );
     }
   }
@@ -168,6 +188,7 @@ export const linkTrace: Apply<'trace.link'> = (study, command, context) => {
   const parent = referred(study, 'requirement', 'parentId', command.parentId);
   const child = referred(study, 'requirement', 'childId', command.childId);
   refuseUnlessEditable(child, context);
+  refuseWithdrawnParent(parent, 'parentId');
   if (study.find('trace', 'parentId', parent.id).some((trace) => trace.childId === child.id)) {
     throw invalid('childId', child.key, `${child.key} is already linked below ${parent.key}.`);
   }
@@ -181,7 +202,7 @@ export const linkTrace: Apply<'trace.link'> = (study, command, context) => {
     });
   }
   study.put('trace', {
-    id: command.id ?? context.newId(),
+    id: freshId(study, 'trace', command, context),
     version: 1,
     parentId: parent.id,
     childId: child.id,
@@ -190,7 +211,7 @@ export const linkTrace: Apply<'trace.link'> = (study, command, context) => {
 };
 
 /** Requirement ids from `ancestor` down to `from`, when `ancestor` lies above it. */
-function pathUp(study: Study, from: string, ancestor: string): string[] | null {
+export function pathUp(study: Study, from: string, ancestor: string): string[] | null {
   if (from === ancestor) return [];
   for (const trace of study.find('trace', 'childId', from)) {
     const rest = trace.parentId === ancestor ? [ancestor] : pathUp(study, trace.parentId, ancestor);

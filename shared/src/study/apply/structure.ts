@@ -1,6 +1,7 @@
 import type { Element } from '@shared/contract';
-import { type Apply, given, labelOf, referred, revised, target } from '../edit-context';
+import { type Apply, freshId, given, labelOf, referred, revised, target } from '../edit-context';
 import { Refusal, invalid } from '../refusal';
+import { refuseReservedPrefix } from './requirements';
 
 /** Changes the study's settings. */
 export const configureStudy: Apply<'study.configure'> = (study, command) => {
@@ -10,7 +11,7 @@ export const configureStudy: Apply<'study.configure'> = (study, command) => {
 
 /** Adds a row to the margin policy; one row per parameter and maturity. */
 export const createPolicy: Apply<'policy.create'> = (study, command, context) => {
-  const { type: _type, id, ...fields } = command;
+  const { type: _type, id: _id, ...fields } = command;
   const same = study
     .all('policy')
     .find((row) => row.parameter === fields.parameter && row.maturity === fields.maturity);
@@ -20,7 +21,7 @@ export const createPolicy: Apply<'policy.create'> = (study, command, context) =>
       fields.parameter,
       `there is already a row for ${fields.parameter} at maturity ${fields.maturity}; revise that one.`,
     );
-  study.put('policy', { id: id ?? context.newId(), version: 1, ...fields });
+  study.put('policy', { id: freshId(study, 'policy', command, context), version: 1, ...fields });
 };
 
 /** Changes a row of the margin policy. */
@@ -36,11 +37,12 @@ export const removePolicy: Apply<'policy.remove'> = (study, command) => {
 
 /** Adds an element to the product tree. */
 export const createElement: Apply<'element.create'> = (study, command, context) => {
+  refuseReservedPrefix(command.key, 'key');
   if (study.byKey('element', command.key))
     throw invalid('key', command.key, 'the code is taken by another element; choose one that is free.');
   if (command.parentId) referred(study, 'element', 'parentId', command.parentId);
   study.put('element', {
-    id: command.id ?? context.newId(),
+    id: freshId(study, 'element', command, context),
     version: 1,
     key: command.key,
     name: command.name,

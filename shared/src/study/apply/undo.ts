@@ -2,6 +2,7 @@ import type { EntityKind, EntityKinds, PatchEntry } from '@shared/contract';
 import { type Apply, labelOf } from '../edit-context';
 import { Refusal } from '../refusal';
 import { isControlled } from './analyses';
+import { refuseUnsound } from './soundness';
 
 /** Kinds whose direct edits can be taken back by the person who made them. */
 const UNDOABLE: readonly EntityKind[] = [
@@ -30,6 +31,7 @@ export const undoEdit: Apply<'edit.undo'> = (study, command, context) => {
       { field: 'revision', value: String(command.revision), expected: 'a revision of your own' },
     );
   for (const change of [...entry.patch].reverse()) undoOne(change);
+  refuseUnsound(study, entry.patch);
 
   function undoOne(change: PatchEntry): void {
     // Counters stay: numbers once issued are never issued again.

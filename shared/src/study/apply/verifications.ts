@@ -1,7 +1,16 @@
 import type { CommandOf, Verification } from '@shared/contract';
 import { describeDimension } from '@shared/units';
-import { knownDimension, outputsOf } from '../analysis-ports';
-import { type Apply, type EditContext, given, referred, refuseControlled, revised, target } from '../edit-context';
+import { isTemperature, knownDimension, outputsOf, temperatureInWords } from '../analysis-ports';
+import {
+  type Apply,
+  type EditContext,
+  freshId,
+  given,
+  referred,
+  refuseControlled,
+  revised,
+  target,
+} from '../edit-context';
 import { a } from '../measures';
 import { Refusal, invalid } from '../refusal';
 import type { Study } from '../study';
@@ -19,7 +28,7 @@ function refuseBaselined(study: Study, requirementId: string, context: EditConte
 }
 
 /** Refuses a link that does not hold: no analysis, no such output, another dimension than the limit. */
-function refuseUnfit(study: Study, verification: Verification): void {
+export function refuseUnfit(study: Study, verification: Verification): void {
   const requirement = study.get('requirement', verification.requirementId)!;
   if (verification.method !== 'analysis') {
     if (verification.analysisId)
@@ -54,6 +63,15 @@ function refuseUnfit(study: Study, verification: Verification): void {
       `it is ${a(describeDimension(output.dimension))}; the limit of ${requirement.key} is ${a(describeDimension(needed))}.`,
     );
   }
+  // What an external result in kelvin means is not stated with it; a computed one knows.
+  const known = analysis.kind !== 'external' && isTemperature(needed);
+  if (known && output.temperature !== requirement.limit.temperature) {
+    throw invalid(
+      'output',
+      `${analysis.key} ${output.name}`,
+      `it is ${temperatureInWords(output.temperature)}; the limit of ${requirement.key} is on ${temperatureInWords(requirement.limit.temperature)}.`,
+    );
+  }
 }
 
 /** Only one verification of a requirement decides: marking one takes the mark from the others. */
@@ -66,9 +84,14 @@ function keepOneDeciding(study: Study, verification: Verification): void {
 
 /** Links a way of verifying to a requirement. */
 export const linkVerification: Apply<'verification.link'> = (study, command, context) => {
-  const { type: _type, id, ...fields } = command;
+  const { type: _type, id: _id, ...fields } = command;
   refuseBaselined(study, fields.requirementId, context);
-  const verification: Verification = { ...fields, id: id ?? context.newId(), version: 1, finding: null };
+  const verification: Verification = {
+    ...fields,
+    id: freshId(study, 'verification', command, context),
+    version: 1,
+    finding: null,
+  };
   refuseUnfit(study, verification);
   const same = study
     .find('verification', 'requirementId', fields.requirementId)
@@ -106,6 +129,12 @@ export const unlinkVerification: Apply<'verification.unlink'> = (study, command,
 export const recordFinding: Apply<'verification.record'> = (study, command, context) => {
   const verification = target(study, 'verification', command);
   const requirement = study.get('requirement', verification.requirementId)!;
+  if (requirement.state === 'withdrawn')
+    throw new Refusal('state', `${requirement.key} is withdrawn.`, {
+      field: 'id',
+      value: requirement.key,
+      expected: 'a requirement in force',
+    });
   if (verification.method === 'analysis' && requirement.limit) {
     throw invalid(
       'id',

@@ -124,7 +124,8 @@ function couldVerify(context: ViewContext, analysis: Analysis): AnalysisSheet['c
     const bare = provenOf(context, id).verdict === 'no evidence';
     for (const port of outputs) {
       if (port.dimension !== dimension || linked.has(`${id} ${port.name}`)) continue;
-      if (isTemperature(dimension) && port.temperature !== limit.temperature) continue;
+      const known = analysis.kind !== 'external' && isTemperature(dimension);
+      if (known && port.temperature !== limit.temperature) continue;
       const { verdict, percent } = wouldGive(context, analysis, port, requirement, limit);
       offers.push({ id, version, key, title, output: port.name, verdict, percent, bare });
     }

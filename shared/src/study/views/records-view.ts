@@ -2,12 +2,13 @@ import type { EntityKinds, Patch, PatchEntry, RecordRow } from '@shared/contract
 import { applyCommands } from '../apply';
 import { newId } from '../ids';
 import { Refusal } from '../refusal';
-import type { EntityNames } from './entity-names';
+import { entityNames, type EntityNames } from './entity-names';
 import { fieldChanges, headline } from './field-changes';
-import type { ViewContext } from './view-context';
+import { personRef, type ViewContext } from './view-context';
 
 /** What a ledger entry changed, field by field in words; what only the machine keeps, such as counters, is left out. */
-export function recordChanges(patch: Patch, names: EntityNames): RecordRow['changes'] {
+export function recordChanges(patch: Patch, context: Pick<ViewContext, 'proof' | 'people'>): RecordRow['changes'] {
+  const names = entityNames(context.proof.study, (id) => personRef(context, id).name, patch);
   return patch.flatMap((entry) => changesOf(entry, names));
 }
 

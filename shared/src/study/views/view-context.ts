@@ -22,6 +22,6 @@ export interface ViewContext {
 }
 
 /** A person by id; a name that is gone reads as such. */
-export function personRef(context: ViewContext, id: string): PersonRef {
+export function personRef(context: Pick<ViewContext, 'people'>, id: string): PersonRef {
   return { id, name: context.people.get(id) ?? 'a former member' };
 }
