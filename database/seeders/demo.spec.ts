@@ -1,6 +1,15 @@
 /** @jest-environment node */
-import type { Command, Verdict } from '@shared/contract';
-import { applyCommands, newId, outputNode, proveFork, Refusal, type Proof, type Proven } from '@shared/study';
+import type { Verdict } from '@shared/contract';
+import {
+  applyCommands,
+  blockingFindings,
+  newId,
+  outputNode,
+  proveFork,
+  Refusal,
+  type Proof,
+  type Proven,
+} from '@shared/study';
 import { MemoryExecutor } from './memory-executor';
 import { seedDemonstration } from './index';
 
@@ -44,7 +53,7 @@ function impact(study: string, changeKey: string): Proof {
     patchOf: () => null,
     personName: (id: string) => id,
   };
-  applyCommands(fork, change.edits as readonly Command[], context, () => {
+  applyCommands(fork, change.edits, context, () => {
     throw new Error('no row is assessed');
   });
   return proveFork(proof, fork);
@@ -137,5 +146,53 @@ describe('Petrel', () => {
     expect(study.byKey('change', 'CR-002')!.state).toBe('submitted');
     expect(() => impact('PETREL', 'CR-002')).toThrow(Refusal);
     expect(study.all('baseline').map(({ key }) => key)).toEqual(['B1', 'B2']);
+  });
+});
+
+describe('Longreach', () => {
+  it('needs a mass ratio of 2.42 and releases 2.0e14 W', () => {
+    // exp(artanh 0.3/0.35) = exp(0.3095/0.35) = 2.421; 142.1 t·c²/2 yr = 2.02e14 W
+    expect(row('LONGREACH', 'PRB-001').value).toBeCloseTo(2.42, 2);
+    expect(Math.abs(output('LONGREACH', 'Energy per second at the engine', 'P') - 2.02e14)).toBeLessThan(5e11);
+  });
+
+  it('rejects one part in 79 of what the structure absorbs', () => {
+    // 0.9·σ·(1500 K)⁴·2π·30 m·200 m = 9.74 GW of 0.38·0.01·2.02e14 W = 769 GW
+    expect(Math.abs(output('LONGREACH', 'Share of the absorbed heat rejected', 'N') - 79)).toBeLessThan(0.5);
+    // In balance 79^(1/4) = 2.98 times hotter than 1500 K
+    expect(Math.abs(row('LONGREACH', 'RAD-001').value! - 4472)).toBeLessThan(10);
+  });
+
+  it('does not close, and says by which requirements', () => {
+    expect(counts('LONGREACH')).toEqual({ compliant: 6, 'non-compliant': 4 });
+    for (const key of ['PRB-002', 'ENG-001', 'RAD-001', 'SHD-001'])
+      expect(row('LONGREACH', key).verdict).toBe('non-compliant');
+  });
+});
+
+describe('Cinder', () => {
+  it('complies and is closed out in every row', () => {
+    expect(counts('CINDER')).toEqual({ compliant: 11 });
+    for (const { closeOut } of proofOf('CINDER').proven.values()) expect(closeOut).toBe('closed');
+    const { study } = proofOf('CINDER');
+    expect(study.all('baseline').map(({ key }) => key)).toEqual(['B1']);
+    for (const analysis of study.all('analysis')) expect(analysis.check).not.toBeNull();
+  });
+
+  it('computes delta-v from the mass that the roll-up gives', () => {
+    // 900 s·g_0·ln(57.9/33.9) = 4.72 km/s
+    expect(Math.abs(row('CINDER', 'STG-001').value! - 4_720)).toBeLessThan(10);
+  });
+});
+
+describe('every study', () => {
+  it('states each requirement without a wording finding that would stop it', () => {
+    for (const { study } of executor.studies.values())
+      for (const requirement of study.all('requirement')) expect(blockingFindings(requirement)).toEqual([]);
+  });
+
+  it('ends its history before now', () => {
+    for (const { study } of executor.studies.values())
+      for (const { at } of study.all('baseline')) expect(new Date(at).getTime()).toBeLessThan(NOW.getTime());
   });
 });

@@ -56,15 +56,11 @@ export class MemoryExecutor implements SeedExecutor {
     held.study.absorb(fork.patch());
     held.proof = proveAll(held.study);
     held.revision += 1;
-    const turned = [...held.proof.proven.values()]
-      .filter(
-        (now) => before.proven.has(now.requirementId) && before.proven.get(now.requirementId)?.verdict !== now.verdict,
-      )
-      .map((now) => ({
-        key: held.study.get('requirement', now.requirementId)!.key,
-        from: before.proven.get(now.requirementId)!.verdict,
-        to: now.verdict,
-      }));
+    const turned = [...held.proof.proven.values()].flatMap(({ requirementId, verdict }) => {
+      const from = before.proven.get(requirementId)?.verdict;
+      const key = held.study.get('requirement', requirementId)?.key;
+      return from === undefined || key === undefined || from === verdict ? [] : [{ key, from, to: verdict }];
+    });
     held.turned.set(
       held.revision,
       turned.map(({ key }) => key),
