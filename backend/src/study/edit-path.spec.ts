@@ -186,7 +186,7 @@ describe('a change request', () => {
     expect(sheet).toMatchObject({ inConflict: true, impact: { problem: { kind: 'conflict' } } });
     expect((await read('/requirements', `draft:${key}`)).status).toBe(409);
     const submit = await post(study, study.owner, [{ type: 'change.submit', id, version: 1 }]);
-    expect([submit.status, submit.body.code]).toEqual([409, 'stale']);
+    expect([submit.status, submit.body.code]).toEqual([409, 'conflict']);
   });
 });
 

@@ -88,6 +88,11 @@ export class Standpoints {
     }
   }
 
+  /** The study as it was at a revision. Throws NotFound for one that has not been made yet. */
+  async revisionProof(studyId: string, revision: number): Promise<Proof> {
+    return (await this.seeRevision(await this.store.now(studyId), revision)).proof;
+  }
+
   private async seeRevision(current: Current, revision: number): Promise<Seen> {
     if (revision > current.revision)
       throw new NotFound(`There is no revision ${revision} in this study; the newest is ${current.revision}.`);

@@ -109,8 +109,8 @@ export async function baselineCounts(
   return counts;
 }
 
-/** Revision at which a change request was approved; null while it was not. */
-export async function approvalRevision(
+/** Revision at which a change request was approved or rejected; null while it still waits. */
+export async function dispositionRevision(
   sequelize: Sequelize,
   studyId: string,
   changeId: string,

@@ -22,7 +22,7 @@ import * as z from 'zod';
 import { NotFound } from '../../middleware/problems';
 import { type Route, studyRead } from '../../middleware/routes';
 import {
-  approvalRevision,
+  dispositionRevision,
   baselineCounts,
   directEditsSince,
   membersOf,
@@ -122,15 +122,21 @@ export const viewRoutes: readonly Route[] = [
     async (context, key, { services, study }) => {
       const change = context.proof.study.byKey('change', key);
       if (!change) return null;
+      const { sequelize, standpoints } = services;
       const personName = (id: string): string => context.people.get(id) ?? 'a former member';
-      const impact = impactOf(context.proof, change, {
-        newId: () => newId(),
-        at: context.provedAt,
-        personName,
-        revision: context.standpoint.revision,
+      const decided = change.state === 'approved' || change.state === 'rejected';
+      const disposedAt = decided ? await dispositionRevision(sequelize, study.id, change.id) : null;
+      // What a decided request did is told from the study just before its disposition.
+      const before = disposedAt === null ? context.proof : await standpoints.revisionProof(study.id, disposedAt - 1);
+      const then = before.study.get('change', change.id) ?? change;
+      const revision = disposedAt === null ? context.standpoint.revision : disposedAt - 1;
+      const impact = impactOf(before, then, { newId: () => newId(), at: context.provedAt, personName, revision });
+      const members = await membersOf(sequelize, study.id);
+      return changeSheet(context, key, impact, {
+        members,
+        disposedAt,
+        before: disposedAt === null ? null : before.study,
       });
-      const revision = await approvalRevision(services.sequelize, study.id, change.id);
-      return changeSheet(context, key, impact, { members: await membersOf(services.sequelize, study.id), revision });
     },
   ),
   view(
