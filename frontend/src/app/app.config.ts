@@ -1,6 +1,6 @@
 import { provideHttpClient, withInterceptors } from '@angular/common/http';
 import {
-  ApplicationConfig,
+  type ApplicationConfig,
   ErrorHandler,
   inject,
   provideAppInitializer,

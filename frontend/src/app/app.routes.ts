@@ -1,4 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 import { administrator, signedIn } from './core/session/guards';
 
 export const routes: Routes = [

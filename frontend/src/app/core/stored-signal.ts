@@ -1,4 +1,4 @@
-import { WritableSignal, effect, signal } from '@angular/core';
+import { type WritableSignal, effect, signal } from '@angular/core';
 
 /** A signal kept in localStorage under `key`; a stored value that `read` does not accept is forgotten. Needs an injection context. */
 export function storedSignal<T>(key: string, initial: T, read: (stored: unknown) => T | undefined): WritableSignal<T> {

@@ -1,4 +1,4 @@
-import { DestroyRef, Injectable, Signal, computed, inject, signal } from '@angular/core';
+import { DestroyRef, Injectable, type Signal, computed, inject, signal } from '@angular/core';
 
 /** Something a person can do with the sheet that is open. The main one stands last, in cobalt. */
 export interface SheetAction {

@@ -1,4 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 import { Mail } from './mail';
 
 export default [{ path: '', component: Mail }] satisfies Routes;

@@ -5,7 +5,7 @@ import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import { firstValueFrom } from 'rxjs';
 import { ErrorLine } from '../core/errors/error-line';
-import { ProblemError, toProblem } from '../core/http/problem-error';
+import { type ProblemError, toProblem } from '../core/http/problem-error';
 import { Control, Field } from '../ui/field/field';
 import { takeLinkToken } from './link-token';
 import { passwordProblem } from './new-password';

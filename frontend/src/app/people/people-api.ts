@@ -8,7 +8,7 @@ import type {
   PersonChange,
   Role,
 } from '@shared/contract';
-import { Observable } from 'rxjs';
+import { type Observable } from 'rxjs';
 
 /** People, invitations and password resets on the server. */
 @Injectable({ providedIn: 'root' })

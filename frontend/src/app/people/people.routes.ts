@@ -1,4 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 import { People } from './people';
 
 export default [{ path: '', component: People }] satisfies Routes;

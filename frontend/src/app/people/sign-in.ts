@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angu
 import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { ProblemError, toProblem } from '../core/http/problem-error';
+import { type ProblemError, toProblem } from '../core/http/problem-error';
 import { SessionStore } from '../core/session/session-store';
 import { Control, Field } from '../ui/field/field';
 

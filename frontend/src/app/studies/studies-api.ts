@@ -1,13 +1,14 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, inject } from '@angular/core';
 import type { StudySummary } from '@shared/contract';
-import { Observable } from 'rxjs';
+import { type Observable, map } from 'rxjs';
 
 /** What a new study starts with. */
 export interface NewStudy {
   readonly key: string;
   readonly name: string;
   readonly summary: string;
+  readonly concept: string;
 }
 
 /** The studies on the server that the person takes part in. */
@@ -16,10 +17,10 @@ export class StudiesApi {
   private readonly http = inject(HttpClient);
 
   list(): Observable<readonly StudySummary[]> {
-    return this.http.get<readonly StudySummary[]>('/api/studies');
+    return this.http.get<{ studies: readonly StudySummary[] }>('/api/studies').pipe(map((answer) => answer.studies));
   }
 
-  create(study: NewStudy): Observable<StudySummary> {
-    return this.http.post<StudySummary>('/api/studies', study);
+  create(study: NewStudy): Observable<{ readonly key: string }> {
+    return this.http.post<{ key: string }>('/api/studies', study);
   }
 }

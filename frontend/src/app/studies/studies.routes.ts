@@ -1,4 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 import { Studies } from './studies';
 
 export default [{ path: '', component: Studies }] satisfies Routes;

@@ -1,6 +1,6 @@
-import { DestroyRef, Injectable, inject } from '@angular/core';
+import { type DestroyRef, Injectable, inject } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { AbstractControl } from '@angular/forms';
+import { type AbstractControl } from '@angular/forms';
 import { debounceTime } from 'rxjs';
 import { SessionStore } from '../session/session-store';
 

@@ -1,5 +1,5 @@
 import { ErrorHandler, Injectable, inject, signal } from '@angular/core';
-import { ProblemError, toProblem } from '../http/problem-error';
+import { type ProblemError, fieldSentence, toProblem } from '../http/problem-error';
 
 /** One sentence for the quiet line above the title block. */
 export interface Announcement {
@@ -46,7 +46,9 @@ export class ErrorLineHandler extends ErrorHandler {
 }
 
 function sentence(problem: ProblemError): string {
-  const fields = problem.fields.map((field) => field.message).join(' ');
+  const fields = problem.fields
+    .map((field) => `${field.field ? `${field.field}: ` : ''}${fieldSentence(field)}`)
+    .join(' ');
   return [problem.title, problem.detail === problem.title ? '' : problem.detail, fields]
     .filter((part) => part !== '')
     .join(' ');

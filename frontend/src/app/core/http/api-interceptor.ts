@@ -1,6 +1,6 @@
-import { HttpEvent, HttpHandlerFn, HttpRequest } from '@angular/common/http';
+import { type HttpEvent, type HttpHandlerFn, type HttpRequest } from '@angular/common/http';
 import { inject } from '@angular/core';
-import { Observable, catchError, throwError } from 'rxjs';
+import { type Observable, catchError, throwError } from 'rxjs';
 import { SignedOut } from '../session/signed-out';
 import { toProblem } from './problem-error';
 

@@ -1,7 +1,7 @@
-import { Signal, computed, signal } from '@angular/core';
+import { type Signal, computed, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
-import { Observable, catchError, map, of, startWith, switchMap } from 'rxjs';
-import { ProblemError, toProblem } from './problem-error';
+import { type Observable, catchError, map, of, startWith, switchMap } from 'rxjs';
+import { type ProblemError, toProblem } from './problem-error';
 
 /** What a view knows of something it reads: the value so far, whether it is being read, and why it could not be. */
 export interface ViewState<T> {

@@ -5,6 +5,8 @@ export interface FieldProblem {
   readonly field: string;
   readonly value?: unknown;
   readonly message: string;
+  /** What would be right, where it can be said. */
+  readonly expected?: string;
 }
 
 interface ProblemDocument {
@@ -31,9 +33,10 @@ export class ProblemError extends Error {
     super(detail || title);
   }
 
-  /** The message for one field, or undefined when that field was not refused. */
+  /** The sentence for one field, or undefined when it was not refused. `limit.value` also means `commands.0.limit.value`. */
   fieldMessage(field: string): string | undefined {
-    return this.fields.find((problem) => problem.field === field)?.message;
+    const problem = this.fields.find((candidate) => candidate.field === field || candidate.field.endsWith(`.${field}`));
+    return problem === undefined ? undefined : fieldSentence(problem);
   }
 
   /** True when the edit was refused because somebody else changed the same thing first. */
@@ -71,6 +74,13 @@ export function toProblem(error: unknown): ProblemError {
     Array.isArray(problem.fields) ? problem.fields.filter(isFieldProblem) : [],
     problem.current,
   );
+}
+
+/** A refused field in a sentence: what is wrong with it and what would be right. */
+export function fieldSentence(problem: FieldProblem): string {
+  const fault = problem.message.replace(/\.$/, '');
+  const sentence = `${fault.charAt(0).toUpperCase()}${fault.slice(1)}.`;
+  return problem.expected ? `${sentence} Right would be ${problem.expected.replace(/\.$/, '')}.` : sentence;
 }
 
 function isRecord(value: unknown): value is Record<string, unknown> {

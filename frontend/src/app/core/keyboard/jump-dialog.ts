@@ -145,9 +145,9 @@ export class JumpDialog {
   private search(query: string) {
     const searching: Found = { query, hits: this.found().hits, searching: true, failed: false };
     return this.http
-      .get<readonly Hit[]>(this.context.api('search'), { params: { q: query, ...this.context.readParams() } })
+      .get<{ hits: readonly Hit[] }>(this.context.api('search'), { params: { q: query, ...this.context.readParams() } })
       .pipe(
-        map((hits): Found => ({ query, hits, searching: false, failed: false })),
+        map(({ hits }): Found => ({ query, hits, searching: false, failed: false })),
         catchError(() => of<Found>({ query, hits: [], searching: false, failed: true })),
         startWith(searching),
       );

@@ -34,7 +34,7 @@ import { Shortcuts } from './shortcuts';
       </label>
     </mat-dialog-content>
     <mat-dialog-actions align="end">
-      <button matButton="filled" mat-dialog-close>Done</button>
+      <button type="button" matButton="filled" mat-dialog-close>Done</button>
     </mat-dialog-actions>
   `,
   styles: `

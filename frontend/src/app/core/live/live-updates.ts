@@ -1,6 +1,6 @@
-import { InjectionToken, Injectable, Signal, inject, signal } from '@angular/core';
+import { InjectionToken, Injectable, type Signal, inject, signal } from '@angular/core';
 import type { StudyEvent } from '@shared/contract';
-import { Observable, Subject, Subscription } from 'rxjs';
+import { type Observable, Subject, type Subscription } from 'rxjs';
 import { parseStudyEvent } from './study-event';
 import { sharedStream } from './shared-stream';
 

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle } from '@angular/material/dialog';
 import { prettyUnit } from '@shared/units';
-import { AS_ENTERED, UNIT_CHOICES, UnitChoice } from './unit-choices';
+import { AS_ENTERED, UNIT_CHOICES, type UnitChoice } from './unit-choices';
 import { UnitPreferences } from './unit-preferences';
 
 /** Where a person chooses the units that numbers are shown in. */
@@ -29,7 +29,7 @@ import { UnitPreferences } from './unit-preferences';
       </div>
     </mat-dialog-content>
     <mat-dialog-actions align="end">
-      <button matButton="filled" mat-dialog-close>Done</button>
+      <button type="button" matButton="filled" mat-dialog-close>Done</button>
     </mat-dialog-actions>
   `,
   styles: `

@@ -1,8 +1,8 @@
 import { Injectable, computed } from '@angular/core';
 import type { Shown } from '@shared/contract';
-import { TemperatureKind, formatSi, fromSi, parseUnit, prettyUnit } from '@shared/units';
+import { type TemperatureKind, formatSi, fromSi, parseUnit, prettyUnit } from '@shared/units';
 import { storedSignal } from '../stored-signal';
-import { AS_ENTERED, SUMMARY_CHOICES, UNIT_CHOICES, UnitChoice } from './unit-choices';
+import { AS_ENTERED, SUMMARY_CHOICES, UNIT_CHOICES, type UnitChoice } from './unit-choices';
 
 export interface ShowOptions {
   readonly digits?: number;

@@ -1,5 +1,5 @@
 import { inject } from '@angular/core';
-import { CanActivateFn, Router } from '@angular/router';
+import { type CanActivateFn, Router } from '@angular/router';
 import { SessionStore } from './session-store';
 
 /** Lets signed-in people through; sends others to sign in and back here afterwards. */

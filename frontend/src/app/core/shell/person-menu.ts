@@ -5,7 +5,7 @@ import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
 import { RouterLink } from '@angular/router';
 import { ErrorLine } from '../errors/error-line';
 import { KeysDialog } from '../keyboard/keys-dialog';
-import { Appearance, DENSITIES, Density, THEMES, Theme } from '../preferences/appearance';
+import { Appearance, DENSITIES, type Density, THEMES, type Theme } from '../preferences/appearance';
 import { UnitDialog } from '../preferences/unit-dialog';
 import { SessionStore } from '../session/session-store';
 
@@ -34,6 +34,7 @@ const DENSITY_NAMES: Readonly<Record<Density, string>> = { dense: 'Dense rows', 
       <mat-divider />
       @for (theme of themes; track theme) {
         <button
+          type="button"
           mat-menu-item
           role="menuitemradio"
           [attr.aria-checked]="appearance.theme() === theme"
@@ -46,6 +47,7 @@ const DENSITY_NAMES: Readonly<Record<Density, string>> = { dense: 'Dense rows', 
       <mat-divider />
       @for (density of densities; track density) {
         <button
+          type="button"
           mat-menu-item
           role="menuitemradio"
           [attr.aria-checked]="appearance.density() === density"
@@ -56,10 +58,10 @@ const DENSITY_NAMES: Readonly<Record<Density, string>> = { dense: 'Dense rows', 
         </button>
       }
       <mat-divider />
-      <button mat-menu-item (click)="openUnits()">Units …</button>
-      <button mat-menu-item (click)="openKeys()">Keys …</button>
+      <button type="button" mat-menu-item (click)="openUnits()">Units …</button>
+      <button type="button" mat-menu-item (click)="openKeys()">Keys …</button>
       <mat-divider />
-      <button mat-menu-item (click)="signOut()">Sign out</button>
+      <button type="button" mat-menu-item (click)="signOut()">Sign out</button>
     </mat-menu>
   `,
   styles: `

@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, ElementRef, computed, effect, inject, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  type ElementRef,
+  computed,
+  effect,
+  inject,
+  viewChild,
+} from '@angular/core';
 import { takeUntilDestroyed, toSignal } from '@angular/core/rxjs-interop';
 import { MatDialog } from '@angular/material/dialog';
 import { Title } from '@angular/platform-browser';
@@ -104,7 +112,7 @@ export class Shell {
 
   private openJump(): void {
     if (this.context.study() !== undefined && this.dialog.openDialogs.length === 0)
-      this.dialog.open(JumpDialog, { width: '620px' });
+      this.dialog.open(JumpDialog, { width: '620px', position: { top: '72px' } });
   }
 
   private offerActionKeys(shortcuts: Shortcuts, onCleanup: (end: () => void) => void): void {

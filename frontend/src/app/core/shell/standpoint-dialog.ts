@@ -50,7 +50,7 @@ import { StudyContext } from '../study/study-context';
       </form>
     </mat-dialog-content>
     <mat-dialog-actions align="end">
-      <button matButton="text" mat-dialog-close>Stay here</button>
+      <button type="button" matButton="text" mat-dialog-close>Stay here</button>
     </mat-dialog-actions>
   `,
   styles: `

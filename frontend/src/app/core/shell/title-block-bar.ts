@@ -8,7 +8,7 @@ import { ErrorLine } from '../errors/error-line';
 import { roleName } from '../study/role-name';
 import { describeStandpoint, isFrozen } from '../study/standpoint';
 import { StudyContext } from '../study/study-context';
-import { SheetAction, TitleBlock } from '../title-block';
+import { type SheetAction, TitleBlock } from '../title-block';
 import { ago } from './ago';
 import { StandpointDialog } from './standpoint-dialog';
 
@@ -53,6 +53,15 @@ export class TitleBlockBar {
   protected readonly acting = computed(() => {
     const roles = this.context.roles().map(roleName);
     return roles.map((role, index) => (index === 0 ? role : role.toLowerCase())).join(', ') || 'Guest';
+  });
+
+  /** "Petrel · now, r418 · you act as board member" */
+  protected readonly inOneLine = computed(() => {
+    const study = this.head()?.study.name.split(',')[0] ?? '';
+    const standpoint = this.standpoint()
+      .replace('Now ·', 'now,')
+      .replace(/^[RBD]/, (letter) => letter.toLowerCase());
+    return `${study} · ${standpoint} · you act as ${this.acting().toLowerCase()}`;
   });
 
   private readonly shownCount = computed(() => (this.isNarrow() ? SHOWN_NARROW : SHOWN_WIDE));

@@ -1,7 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, inject } from '@angular/core';
 import type { Command, EditAnswer } from '@shared/contract';
-import { Observable, tap } from 'rxjs';
+import { type Observable, tap } from 'rxjs';
 import { StudyContext } from './study-context';
 
 export interface EditOptions {

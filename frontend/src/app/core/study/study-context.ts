@@ -1,7 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { ActivatedRouteSnapshot, ResolveEnd, Router, UrlTree } from '@angular/router';
+import { type ActivatedRouteSnapshot, ResolveEnd, Router, type UrlTree } from '@angular/router';
 import type { Role, Standpoint, StudyHead } from '@shared/contract';
 import { filter } from 'rxjs';
 import { load } from '../http/load';

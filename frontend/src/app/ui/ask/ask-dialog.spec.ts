@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { Ask } from './ask';
-import { Question } from './ask-dialog';
+import { type Question } from './ask-dialog';
 
 const QUESTION: Question = {
   title: 'Approve CR-024?',

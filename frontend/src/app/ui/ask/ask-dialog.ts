@@ -50,8 +50,10 @@ export interface Answer {
       }
     </mat-dialog-content>
     <mat-dialog-actions align="end">
-      <button matButton="text" [mat-dialog-close]="undefined">Leave it</button>
-      <button matButton="filled" [class.final]="question.isFinal" (click)="answer()">{{ question.action }}</button>
+      <button type="button" matButton="text" [mat-dialog-close]="undefined">Leave it</button>
+      <button type="button" matButton="filled" [class.final]="question.isFinal" (click)="answer()">
+        {{ question.action }}
+      </button>
     </mat-dialog-actions>
   `,
   styles: `

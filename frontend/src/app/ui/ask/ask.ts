@@ -1,7 +1,7 @@
 import { Injectable, inject } from '@angular/core';
 import { MatDialog } from '@angular/material/dialog';
 import { firstValueFrom } from 'rxjs';
-import { Answer, AskDialog, Question } from './ask-dialog';
+import { type Answer, AskDialog, type Question } from './ask-dialog';
 
 /** Asks the person a question in a dialog. */
 @Injectable({ providedIn: 'root' })

@@ -46,7 +46,7 @@ export function ribbonOf(budget: BudgetView): Ribbon | null {
         share,
         start: (at + inside) / whole,
         length: (length - inside) / whole,
-        value: share.value ?? 0,
+        value: budget.rule === 'sum' ? length - inside : (share.value ?? 0),
       });
     }
     at += length;

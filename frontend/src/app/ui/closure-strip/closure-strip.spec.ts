@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { ClosureStrip } from './closure-strip';
-import { StripMark } from './strip-mark';
+import { type StripMark } from './strip-mark';
 
 const MARKS: readonly StripMark[] = [
   { key: 'VEH-002', title: 'Keep initial mass', verdict: 'non-compliant', percent: -3.4 },

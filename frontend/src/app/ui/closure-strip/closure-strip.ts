@@ -13,9 +13,9 @@ import {
 import { marginPlace } from '../margin/margin-scale';
 import { percentText } from '../margin/margin-text';
 import { verdictTone, verdictWord } from '../verdict/verdict-words';
-import { Placed, beeswarm } from './beeswarm';
+import { type Placed, beeswarm } from './beeswarm';
 import { placeNames } from './name-places';
-import { StripMark } from './strip-mark';
+import { type StripMark } from './strip-mark';
 
 const GAP = 12.5;
 const LANE = 96;
@@ -80,7 +80,7 @@ export class ClosureStrip {
   protected readonly names = computed(() => {
     const failing = this.swarm().filter((placed) => placed.item.verdict === 'non-compliant');
     const worst = [...failing].sort((a, b) => (a.item.percent ?? 0) - (b.item.percent ?? 0)).slice(0, MOST_NAMES);
-    return placeNames(worst, this.width(), this.middle(), this.reach());
+    return placeNames(worst, this.swarm(), this.width(), this.middle());
   });
   protected readonly tabStop = computed(() => this.reached() ?? this.drawn()[0]?.key);
   protected readonly kinds = computed(() => new Set(this.marks().map((mark) => mark.verdict)));

@@ -53,7 +53,7 @@ export type Side = 'theirs' | 'mine';
     </table>
     <div class="actions-row">
       <button matButton="filled" type="button" (click)="resolve.emit(chosen())">Go on with this</button>
-      <button matButton="outlined" type="button" (click)="drop.emit()">Throw mine away</button>
+      <button matButton="outlined" type="button" (click)="discard.emit()">Throw mine away</button>
     </div>
   `,
   styles: `
@@ -89,7 +89,7 @@ export class ConflictView {
   readonly fields = input.required<readonly ConflictField[]>();
   /** The side chosen for each field, by its name; only those that differ. */
   readonly resolve = output<Readonly<Record<string, Side>>>();
-  readonly drop = output<void>();
+  readonly discard = output<void>();
 
   protected readonly sides: readonly Side[] = ['theirs', 'mine'];
   protected readonly differing = computed(() => this.fields().filter((field) => field.theirs !== field.mine));

@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, Directive, computed, inject, input } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  booleanAttribute,
+  Directive,
+  computed,
+  inject,
+  input,
+} from '@angular/core';
 
 let count = 0;
 
@@ -57,7 +65,7 @@ export class Field {
   readonly hint = input('');
   /** What is wrong and what would be right; empty when nothing is. */
   readonly error = input<string | undefined>('');
-  readonly optional = input(false);
+  readonly optional = input(false, { transform: booleanAttribute });
 
   readonly controlId = `field-${this.number}`;
   readonly messageId = `field-${this.number}-message`;

@@ -3,7 +3,7 @@ import {
   CellStyleModule,
   ClientSideRowModelModule,
   ColumnAutoSizeModule,
-  GridOptions,
+  type GridOptions,
   ModuleRegistry,
   RowApiModule,
   RowSelectionModule,

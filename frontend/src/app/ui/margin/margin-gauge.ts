@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { verdictTone, verdictWord } from '../verdict/verdict-words';
-import { GaugeReading } from './gauge-reading';
+import { type GaugeReading } from './gauge-reading';
 import { FULL_SCALE, isBeyondScale, marginPlace } from './margin-scale';
 import { percentText } from './margin-text';
 

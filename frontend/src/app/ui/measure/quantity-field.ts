@@ -1,7 +1,8 @@
 import {
   ChangeDetectionStrategy,
   Component,
-  ElementRef,
+  type ElementRef,
+  booleanAttribute,
   computed,
   effect,
   forwardRef,
@@ -11,14 +12,14 @@ import {
   viewChild,
 } from '@angular/core';
 import {
-  AbstractControl,
-  ControlValueAccessor,
+  type AbstractControl,
+  type ControlValueAccessor,
   NG_VALIDATORS,
   NG_VALUE_ACCESSOR,
-  ValidationErrors,
-  Validator,
+  type ValidationErrors,
+  type Validator,
 } from '@angular/forms';
-import { TemperatureKind, parseUnit, formatSi, parseMeasure, prettyUnit, siUnitOf } from '@shared/units';
+import { type TemperatureKind, parseUnit, formatSi, parseMeasure, prettyUnit, siUnitOf } from '@shared/units';
 
 let count = 0;
 
@@ -112,7 +113,7 @@ export class QuantityField implements ControlValueAccessor, Validator {
   readonly temperature = input<TemperatureKind>('absolute');
   /** Takes a bare number in `unit`. Off by default: a number without unit is asked for one. */
   readonly assumeUnit = input(false);
-  readonly optional = input(false);
+  readonly optional = input(false, { transform: booleanAttribute });
   readonly hint = input('');
   /** A refusal of the server for this field. */
   readonly error = input<string | undefined>('');
