@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { BASES, BUDGET_RULES, BUDGET_SENSES, COMPLIANCES, VERIFICATION_METHODS } from './entities';
+import { BASES, BUDGET_RULES, BUDGET_SENSES, COMPLIANCES, VERIFICATION_METHODS } from './vocabulary';
 import { LimitInput, MeasureInput, UncertaintyInput } from './measure';
 
 const Id = z.uuid();

@@ -1,5 +1,6 @@
 import type { Command } from './commands';
 import type { Limit, Measure, Uncertainty } from './measure';
+import type { BASES, BUDGET_RULES, BUDGET_SENSES, Compliance, VERIFICATION_METHODS } from './vocabulary';
 
 /** Fields every entity of a study has: a sortable identifier and a version that each accepted edit raises. */
 interface Entity {
@@ -41,9 +42,6 @@ export interface Element extends Entity {
 }
 
 export type RequirementState = 'in preparation' | 'in review' | 'baselined' | 'withdrawn';
-export const BUDGET_RULES = ['sum', 'product', 'root-sum-square', 'smallest', 'largest'] as const;
-/** How children relate to the parent's limit: shares of it, demands drawn on it, or contributions that supply it. */
-export const BUDGET_SENSES = ['shares', 'demands', 'contributions'] as const;
 export interface Budget {
   readonly rule: (typeof BUDGET_RULES)[number];
   readonly sense: (typeof BUDGET_SENSES)[number];
@@ -81,7 +79,6 @@ export interface Trace extends Entity {
   readonly share: 'none' | 'proposed' | 'adopted';
 }
 
-export const BASES = ['measured', 'calculated', 'estimated', 'allocated', 'assumed'] as const;
 export interface Quantity extends Entity {
   readonly key: string;
   /** Name in formulas and in typeset proofs, such as I_sp. */
@@ -145,7 +142,6 @@ export interface Analysis extends Entity {
   } | null;
 }
 
-export const VERIFICATION_METHODS = ['analysis', 'test', 'inspection', 'demonstration', 'review of design'] as const;
 export interface Finding {
   readonly met: boolean;
   readonly document: string;
@@ -268,18 +264,6 @@ export const ENTITY_KINDS = [
   'change',
   'baseline',
 ] as const satisfies readonly EntityKind[];
-
-export const VERDICTS = [
-  'compliant',
-  'short margin',
-  'indeterminate',
-  'non-compliant',
-  'not computable',
-  'no evidence',
-] as const;
-export type Verdict = (typeof VERDICTS)[number];
-export const COMPLIANCES = ['yes', 'partial', 'no', 'not assessed'] as const;
-export type Compliance = (typeof COMPLIANCES)[number];
 
 /** One entry of a patch: what one entity was before and is after; null means it did not or does not exist. */
 export type PatchEntry = {

@@ -7,3 +7,4 @@ export * from './standpoint';
 export * from './views';
 export * from './people';
 export * from './problem';
+export * from './vocabulary';

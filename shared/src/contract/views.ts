@@ -4,16 +4,15 @@ import type {
   Binding,
   ChangeRequest,
   ChangeState,
-  Compliance,
   Departure,
   FormulaLine,
   Policy,
   Requirement,
   RequirementState,
   StudySettings,
-  Verdict,
   Verification,
 } from './entities';
+import type { Compliance, Verdict } from './vocabulary';
 import type { Command, CommandType } from './commands';
 import type { Limit, Measure, Uncertainty } from './measure';
 import type { Role } from './roles';
