@@ -23,10 +23,11 @@ const SYMBOLS: readonly (readonly [RegExp, string])[] = [
   [/°C|degC/g, '^{\\circ}C'],
   [/°|\bdeg\b/g, '^{\\circ}'],
   [/%/g, '\\%'],
-  [/k?ohm/g, '\\Omega'],
-  [/\bu(?=[A-Za-z])|µ/g, '\\mu '],
+  [/ohm/g, '\\Omega'],
+  [/\bg_?0\b/g, 'g_0'],
+  [/\bu(?=[A-Za-z])|µ/g, '\\mu{}'],
   [/\^(-?\d+(?:\.\d+)?)/g, '^{$1}'],
-  [/\s*[*·]\s*/g, ' \\cdot '],
+  [/\s*[*·]\s*/g, '{\\cdot}'],
   [/(?<=[A-Za-z0-9})])[ ](?=[A-Za-z(])/g, '\\,'],
 ];
 

@@ -110,5 +110,6 @@ function distanceOf(from: number, to: number): { readonly effort: number; readon
   const ratio = to / from;
   if (!(ratio > 0) || !Number.isFinite(ratio)) return { effort: Number.MAX_VALUE, decades: null };
   const decades = Math.abs(Math.log10(ratio));
-  return { effort: decades, decades: decades >= 1 ? decades : null };
+  // Rounded, so that inputs that are equally far come in the order of their keys and not of the last bit.
+  return { effort: Number(decades.toPrecision(9)), decades: decades >= 1 ? decades : null };
 }
