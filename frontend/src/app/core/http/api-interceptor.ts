@@ -26,7 +26,9 @@ function asWrite(request: HttpRequest<unknown>): HttpRequest<unknown> {
   let headers = request.headers;
   if (!headers.has('Idempotency-Key')) headers = headers.set('Idempotency-Key', crypto.randomUUID());
   // A form upload must keep the boundary that the browser writes into its own content type.
-  if (request.body instanceof FormData || request.body instanceof Blob) return request.clone({ headers });
+  // The own header takes the place of the JSON type as the sign that no other site's form sent it.
+  if (request.body instanceof FormData)
+    return request.clone({ headers: headers.set('X-Requested-With', 'deltaproof') });
   if (!headers.has('Content-Type')) headers = headers.set('Content-Type', 'application/json');
   return request.clone({ headers, body: request.body ?? {} });
 }

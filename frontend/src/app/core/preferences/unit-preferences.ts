@@ -46,7 +46,7 @@ export class UnitPreferences {
     const parsed = parseUnit(preferred);
     if (!parsed.ok) return unit;
     const size = Math.abs(fromSi(si, parsed.unit));
-    return si === 0 || (size >= 0.1 && size < 10_000) ? preferred : unit;
+    return si === 0 || (size >= 0.1 && size < 1_000_000) ? preferred : unit;
   }
 
   /** An SI value in words: "39.1 km/s". */
