@@ -59,6 +59,8 @@ export async function startProduct(settings, options = {}) {
       PORT: String(settings.port),
       DEMO: settings.demo ? '1' : '0',
       DATA_DIR: data.path,
+      // One line per request is for operators; at a desk only what went wrong is worth the space.
+      LOG_LEVEL: process.env.LOG_LEVEL ?? (settings.production ? 'info' : 'warn'),
       PUBLIC_URL: settings.publicUrl,
       // The server refuses a cluster that could lose a commit, unless told that it is a throwaway one.
       ...(durable ? {} : { ALLOW_UNSAFE_DATABASE: '1' }),

@@ -1,4 +1,5 @@
 /** Runs steps in lanes, each as soon as what it waits for has passed, and adds up what they counted. */
+import { CommandFailed } from '../database/processes.mjs';
 
 /**
  * @typedef {object} Outcome
@@ -56,7 +57,7 @@ async function runStep(step) {
   try {
     outcome = await step.run();
   } catch (error) {
-    outcome = { passed: 0, failed: 1, output: error instanceof Error ? (error.stack ?? error.message) : String(error) };
+    outcome = { passed: 0, failed: 1, output: describe(error) };
   }
   const time = `${((performance.now() - begin) / 1000).toFixed(1)} s`;
   const verdict = outcome.failed === 0 ? 'ok  ' : 'FAIL';
@@ -64,4 +65,10 @@ async function runStep(step) {
     console.log(`\n──── ${step.name} ${'─'.repeat(Math.max(0, 70 - step.name.length))}\n${outcome.output.trimEnd()}`);
   console.log(`${verdict} ${step.name}: ${outcome.passed} passed, ${outcome.failed} failed (${time})`);
   return outcome;
+}
+
+/** A failed command is told by what it printed; anything else by where it happened. @param {unknown} error */
+function describe(error) {
+  if (error instanceof CommandFailed) return error.message;
+  return error instanceof Error ? (error.stack ?? error.message) : String(error);
 }

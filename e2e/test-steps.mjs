@@ -84,7 +84,7 @@ function runNode(program, args, env = process.env) {
   // Jest and the Angular build behave as in a terminal only when not told that they are in production.
   return run(process.execPath, [join(repository, programs[program]), ...args], {
     cwd: repository,
-    env: { ...env, NODE_ENV: 'test', FORCE_COLOR: '0' },
+    env: { ...env, NODE_ENV: 'test', NO_COLOR: '1' },
   });
 }
 
