@@ -16,9 +16,11 @@ export function requirementsInForce({ proof }: ProofSource): Requirement[] {
     .sort(byKey);
 }
 
+const KEYS = new Intl.Collator('en', { numeric: true });
+
 /** Order of keys as people read them: VEH-2 before VEH-10. */
 export function byKey(a: { readonly key: string }, b: { readonly key: string }): number {
-  return a.key.localeCompare(b.key, 'en', { numeric: true });
+  return KEYS.compare(a.key, b.key);
 }
 
 /** Derived state of a requirement; every requirement of a proved study has one. */
