@@ -1,3 +1,8 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
+import { ChangePage } from './change-page';
+import { Changes } from './changes';
 
-export default [] satisfies Routes;
+export default [
+  { path: '', component: Changes },
+  { path: ':key', component: ChangePage },
+] satisfies Routes;
