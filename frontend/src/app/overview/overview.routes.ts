@@ -1,3 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
+import { Overview } from './overview';
 
-export default [] satisfies Routes;
+export default [{ path: '', component: Overview }] satisfies Routes;
