@@ -43,9 +43,9 @@ function compileProgram(
   const codeStarts = new Int32Array(nodes + 1);
   const readStarts = new Int32Array(nodes + 1);
   const reads: number[] = [];
-  const formulas = new Map<number, FormulaSpec>();
+  const formulas: (FormulaSpec | undefined)[] = [];
   const functions = new Map<number, FunctionNode>();
-  const inputLabels = new Map<number, string>();
+  const inputLabels: string[] = [];
 
   let rank = 0;
   for (const item of items) {
@@ -56,13 +56,13 @@ function compileProgram(
     const input = item.kind === 'input' ? spec.inputs[item.index] : undefined;
     if (formula) {
       const { names, root } = formula.formula;
-      formulas.set(rank, formula);
+      formulas[rank] = formula;
       compiler.compile(root, rank, (name) => reads[first + names.indexOf(name)] as number);
     }
     if (fn && fn.outputs.length > 0) {
       functions.set(rank, { id: fn.id, label: fn.label ?? fn.id, outputs: fn.outputs.length, compute: fn.compute });
     }
-    if (input) inputLabels.set(rank, input.label ?? input.id);
+    if (input) inputLabels[rank] = input.label ?? input.id;
     for (let k = 0; k < item.provides.length; k++) {
       kinds[rank + k] = formula ? Kind.Formula : !fn ? Kind.Input : k === 0 ? Kind.Function : Kind.FurtherOutput;
       codeStarts[rank + k + 1] = compiler.length;

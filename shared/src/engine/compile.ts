@@ -6,32 +6,8 @@ import {
   type FormulaNode,
   type FunctionName,
 } from '@shared/formula';
+import { fuse } from './fuse';
 import { Op, STRIDE } from './tape';
-
-/** Operations that turn an infinite argument into a finite result and so need it caught before. */
-const SWALLOWS: ReadonlySet<Op> = new Set([
-  Op.Power,
-  Op.Exp,
-  Op.Expm1,
-  Op.Atan,
-  Op.Tanh,
-  Op.Sign,
-  Op.Atan2,
-  Op.Min,
-  Op.Max,
-]);
-
-/** Operations whose result is finite or NaN whatever the argument. */
-const NEVER_INFINITE: ReadonlySet<Op> = new Set([
-  Op.Sin,
-  Op.Cos,
-  Op.Atan,
-  Op.Atan2,
-  Op.Tanh,
-  Op.Sign,
-  Op.Asin,
-  Op.Acos,
-]);
 
 const BINARY_OP: Readonly<Record<BinaryOperator, Op>> = {
   '+': Op.Add,
@@ -76,8 +52,6 @@ const FUNCTION_OP: Readonly<Record<FunctionName, Op>> = {
 /** Where a value stands while a formula is compiled, and what is known of it. */
 interface Operand {
   readonly slot: number;
-  /** Finite or NaN, never infinite. */
-  readonly finite: boolean;
   /** The number itself, when no name is read. */
   readonly constant?: number;
 }
@@ -125,6 +99,7 @@ export class TapeCompiler {
       const slot = code[i] as number;
       if (slot < 0) code[i] = firstTemporary - 1 - slot;
     }
+    fuse(code, firstTemporary);
     return { code, constants: [...this.constantSlots.keys()], temporaries: this.temporaries };
   }
 
@@ -133,12 +108,12 @@ export class TapeCompiler {
       case 'number':
         return this.constant(node.value);
       case 'name':
-        return { slot: this.slotOf(node.name), finite: true };
+        return { slot: this.slotOf(node.name) };
       case 'negate': {
         const mark = this.inUse;
         const inner = this.operand(node.operand);
         if (inner.constant !== undefined) return this.constant(-inner.constant);
-        return this.result(Op.Negate, mark, inner, inner, inner.finite);
+        return this.result(Op.Negate, mark, inner, inner);
       }
       case 'binary':
         return this.binary(node.op, node.left, node.right);
@@ -146,14 +121,14 @@ export class TapeCompiler {
         return this.comparison(node.ops, node.operands);
       case 'conditional': {
         const mark = this.inUse;
-        const condition = this.guarded(this.operand(node.condition));
+        const condition = this.operand(node.condition);
         const yes = this.operand(node.whenTrue);
         const no = this.operand(node.whenFalse);
         this.inUse = mark;
         const slot = this.temporary();
         this.emit(Op.Select, slot, condition.slot, yes.slot);
         this.emit(Op.Otherwise, slot, no.slot, no.slot);
-        return { slot, finite: yes.finite && no.finite };
+        return { slot };
       }
       case 'call':
         return this.call(node.fn, node.args);
@@ -162,72 +137,66 @@ export class TapeCompiler {
 
   private binary(op: BinaryOperator, leftNode: FormulaNode, rightNode: FormulaNode): Operand {
     const mark = this.inUse;
-    let left = this.operand(leftNode);
-    let right = this.operand(rightNode);
+    const left = this.operand(leftNode);
+    const right = this.operand(rightNode);
     if (left.constant !== undefined && right.constant !== undefined) {
       const folded = binary(op, left.constant, right.constant);
       if (Number.isFinite(folded)) return this.constant(folded);
     }
-    if (op === '^' && right.constant === 2) return this.result(Op.Multiply, mark, left, left, false);
-    if (op === '/' || op === '^') right = this.guarded(right);
-    if (op === '^') left = this.guarded(left);
-    return this.result(BINARY_OP[op], mark, left, right, false);
+    if (op === '^' && right.constant === 2) return this.result(Op.Multiply, mark, left, left);
+    return this.result(BINARY_OP[op], mark, left, right);
   }
 
   /** A chain holds when the product of its links is 1. */
   private comparison(ops: readonly CompareOperator[], nodes: readonly FormulaNode[]): Operand {
     const mark = this.inUse;
-    const operands = nodes.map((node) => this.guarded(this.operand(node)));
+    const operands = nodes.map((node) => this.operand(node));
     let all: Operand | undefined;
     ops.forEach((op, i) => {
       const [a, b] = [operands[i] as Operand, operands[i + 1] as Operand];
       const link = this.link(op, a, b);
-      all = all ? this.result(Op.Multiply, this.inUse, all, link, true) : link;
+      all = all ? this.result(Op.Multiply, this.inUse, all, link) : link;
     });
     const slot = (all as Operand | undefined)?.slot ?? 0;
     this.inUse = mark;
     const kept = this.temporary();
     if (kept !== slot) this.emit(Op.Copy, kept, slot, slot);
-    return { slot: kept, finite: true };
+    return { slot: kept };
   }
 
   private link(op: CompareOperator, a: Operand, b: Operand): Operand {
     switch (op) {
       case '<':
-        return this.result(Op.Less, this.inUse, a, b, true);
+        return this.result(Op.Less, this.inUse, a, b);
       case '<=':
-        return this.result(Op.LessOrEqual, this.inUse, a, b, true);
+        return this.result(Op.LessOrEqual, this.inUse, a, b);
       case '>':
-        return this.result(Op.Less, this.inUse, b, a, true);
+        return this.result(Op.Less, this.inUse, b, a);
       case '>=':
-        return this.result(Op.LessOrEqual, this.inUse, b, a, true);
+        return this.result(Op.LessOrEqual, this.inUse, b, a);
       case '==':
-        return this.result(Op.Equal, this.inUse, a, b, true);
+        return this.result(Op.Equal, this.inUse, a, b);
       case '!=':
-        return this.result(Op.NotEqual, this.inUse, a, b, true);
+        return this.result(Op.NotEqual, this.inUse, a, b);
     }
   }
 
   private call(fn: FunctionName, nodes: readonly FormulaNode[]): Operand {
     const mark = this.inUse;
     const op = FUNCTION_OP[fn];
-    const operands = nodes.map((node) => {
-      const operand = this.operand(node);
-      return SWALLOWS.has(op) ? this.guarded(operand) : operand;
-    });
+    const operands = nodes.map((node) => this.operand(node));
     const constants = operands.map((operand) => operand.constant);
     if (constants.every((constant): constant is number => constant !== undefined)) {
       const folded = applyFunction(fn, constants);
       if (Number.isFinite(folded)) return this.constant(folded);
     }
     const first = operands[0] as Operand;
-    const finite = NEVER_INFINITE.has(op);
-    if (operands.length === 1) return this.result(op, mark, first, first, finite);
+    if (operands.length === 1) return this.result(op, mark, first, first);
     // While arguments are still to come, the folded value stands above all of them.
     const top = this.inUse;
     const rest = operands.slice(1);
     return rest.reduce(
-      (folded, operand, i) => this.result(op, i === rest.length - 1 ? mark : top, folded, operand, finite),
+      (folded, operand, i) => this.result(op, i === rest.length - 1 ? mark : top, folded, operand),
       first,
     );
   }
@@ -238,28 +207,22 @@ export class TapeCompiler {
       const zero = this.constant(0);
       const slot = this.temporary();
       this.emit(Op.Negate, slot, zero.slot, zero.slot);
-      return { slot, finite: true };
+      return { slot };
     }
     let slot = this.constantSlots.get(value);
     if (slot === undefined) {
       slot = this.nodes + this.constantSlots.size;
       this.constantSlots.set(value, slot);
     }
-    return { slot, finite: true, constant: value };
+    return { slot, constant: value };
   }
 
   /** Emits an operation whose operands are no longer needed; `mark` is the temporaries in use before them. */
-  private result(op: Op, mark: number, a: Operand, b: Operand, finite: boolean): Operand {
+  private result(op: Op, mark: number, a: Operand, b: Operand): Operand {
     this.inUse = mark;
     const slot = this.temporary();
     this.emit(op, slot, a.slot, b.slot);
-    return { slot, finite };
-  }
-
-  private guarded(operand: Operand): Operand {
-    if (operand.finite) return operand;
-    this.emit(Op.Finite, operand.slot, operand.slot, operand.slot);
-    return { slot: operand.slot, finite: true };
+    return { slot };
   }
 
   private temporary(): number {

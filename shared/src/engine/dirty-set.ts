@@ -1,4 +1,7 @@
-/** A set of ranks to be visited in ascending order, as bits with one summary bit per word. */
+/**
+ * A set of ranks to be visited in ascending order, as bits in words with one summary bit for each word that has any. A
+ * word's summary bit may outlast its bits until a visit clears it.
+ */
 export class DirtySet {
   readonly words: Int32Array;
   readonly summary: Int32Array;
@@ -9,28 +12,15 @@ export class DirtySet {
   }
 
   add(rank: number): void {
+    const { words, summary } = this;
     const word = rank >>> 5;
-    this.words[word] = (this.words[word] as number) | (1 << (rank & 31));
-    this.summary[word >>> 5] = (this.summary[word >>> 5] as number) | (1 << (word & 31));
+    const bits = words[word] as number;
+    words[word] = bits | (1 << (rank & 31));
+    if (bits === 0) summary[word >>> 5] = (summary[word >>> 5] as number) | (1 << (word & 31));
   }
 
-  /**
-   * Takes out the lowest rank not below the word of `from`; -1 when there is none. A visit may add ranks above the one
-   * taken, never below, so the caller passes the last rank and the search goes on from there.
-   */
-  takeFrom(from: number): number {
-    const { words, summary } = this;
-    for (let s = from >>> 10; s < summary.length; s++) {
-      const marks = summary[s] as number;
-      if (marks === 0) continue;
-      const word = (s << 5) + 31 - Math.clz32(marks & -marks);
-      const bits = words[word] as number;
-      const lowest = bits & -bits;
-      const left = bits ^ lowest;
-      words[word] = left;
-      if (left === 0) summary[s] = marks & ~(1 << (word & 31));
-      return (word << 5) + 31 - Math.clz32(lowest);
-    }
-    return -1;
+  clear(): void {
+    this.words.fill(0);
+    this.summary.fill(0);
   }
 }

@@ -33,9 +33,11 @@ export interface Program {
   /** Ranks to be computed again after each rank changes. */
   readonly dependantStarts: Int32Array;
   readonly dependants: Int32Array;
-  readonly formulas: ReadonlyMap<number, FormulaSpec>;
+  /** The formula of each rank that has one. */
+  readonly formulas: readonly (FormulaSpec | undefined)[];
   readonly functions: ReadonlyMap<number, FunctionNode>;
-  readonly inputLabels: ReadonlyMap<number, string>;
+  /** What failure messages call the input of each rank that is one. */
+  readonly inputLabels: readonly (string | undefined)[];
 }
 
 /** How long the logs were at some moment. */
@@ -52,8 +54,10 @@ export interface Mark {
 export class Propagation {
   private readonly dirty: DirtySet;
   private readonly failures = new Map<number, Failure>();
-  private readonly logRanks: number[] = [];
-  private readonly logValues: number[] = [];
+  /** Overwritten values: rank and value before, `logged` of them. */
+  private logRanks: Int32Array;
+  private logValues: Float64Array;
+  private logged = 0;
   private readonly failureLog: { readonly rank: number; readonly before: Failure | undefined }[] = [];
 
   constructor(
@@ -62,6 +66,8 @@ export class Propagation {
     private readonly checks: CheckTable,
   ) {
     this.dirty = new DirtySet(program.ids.length);
+    this.logRanks = new Int32Array(program.ids.length);
+    this.logValues = new Float64Array(program.ids.length);
   }
 
   /** Why a rank has no value; undefined when it has one. */
@@ -75,29 +81,42 @@ export class Propagation {
       this.store(rank, value, undefined);
       return;
     }
-    const label = this.program.inputLabels.get(rank) ?? '';
+    const label = this.program.inputLabels[rank] ?? '';
     this.store(rank, NaN, { code: 'missing', message: `${label} has no value`, origin: this.program.ids[rank] ?? '' });
   }
 
-  /** Recomputes everything marked, in the order of ranks. */
+  /** Recomputes everything marked, in the order of ranks. A visit only ever marks ranks above its own. */
   propagate(): void {
-    const { dirty } = this;
-    const { kinds, code, codeStarts } = this.program;
+    const { words, summary } = this.dirty;
+    for (let s = 0; s < summary.length; s++) {
+      for (let marks = summary[s] as number; marks !== 0; marks = summary[s] as number) {
+        const bit = marks & -marks;
+        const word = (s << 5) + 31 - Math.clz32(bit);
+        for (let bits = words[word] as number; bits !== 0; bits = words[word] as number) {
+          const lowest = bits & -bits;
+          words[word] = bits ^ lowest;
+          this.visit((word << 5) + 31 - Math.clz32(lowest));
+        }
+        summary[s] = (summary[s] as number) & ~bit;
+      }
+    }
+  }
+
+  private visit(rank: number): void {
     const { values } = this;
-    for (let rank = dirty.takeFrom(0); rank >= 0; rank = dirty.takeFrom(rank)) {
-      if (kinds[rank] === Kind.Function) {
-        this.runFunction(rank);
-        continue;
-      }
-      const before = values[rank] as number;
-      run(code, values, codeStarts[rank] as number, codeStarts[rank + 1] as number);
-      const after = values[rank] as number;
-      if (after - after !== 0 || before !== before) {
-        values[rank] = before;
-        this.storeFormula(rank, after);
-      } else if (!Object.is(after, before)) {
-        this.changed(rank, before, after);
-      }
+    const { kinds, code, codeStarts } = this.program;
+    if (kinds[rank] === Kind.Function) {
+      this.runFunction(rank);
+      return;
+    }
+    const before = values[rank] as number;
+    run(code, values, codeStarts[rank] as number, codeStarts[rank + 1] as number);
+    const after = values[rank] as number;
+    if (after - after !== 0 || before !== before) {
+      values[rank] = before;
+      this.storeFormula(rank, after);
+    } else if (!Object.is(after, before)) {
+      this.changed(rank, before, after);
     }
   }
 
@@ -105,7 +124,7 @@ export class Propagation {
   recompute(): void {
     const { kinds, code, codeStarts } = this.program;
     const { values } = this;
-    const mark = this.logRanks.length;
+    const mark = this.logged;
     for (let rank = 0; rank < kinds.length; rank++) {
       if (kinds[rank] === Kind.Formula) {
         const before = values[rank] as number;
@@ -119,21 +138,20 @@ export class Propagation {
       this.checks.update(rank, values[rank] as number);
     }
     // Everything has been visited: what was marked on the way is done.
-    this.dirty.words.fill(0);
-    this.dirty.summary.fill(0);
+    this.dirty.clear();
     this.forget(mark, 0);
   }
 
   /** A place in the log to come back to. */
   mark(): Mark {
-    return { values: this.logRanks.length, failures: this.failureLog.length, turns: this.checks.turns };
+    return { values: this.logged, failures: this.failureLog.length, turns: this.checks.turns };
   }
 
   /** Ids that changed since the mark: the inputs written, then what follows from them in the order of ranks. */
   changedSince(mark: Mark): string[] {
     const { ids } = this.program;
     const changed: string[] = [];
-    for (let i = mark.values; i < this.logRanks.length; i++) changed.push(ids[this.logRanks[i] as number] as string);
+    for (let i = mark.values; i < this.logged; i++) changed.push(ids[this.logRanks[i] as number] as string);
     return changed;
   }
 
@@ -151,7 +169,7 @@ export class Propagation {
       if (entry.before) this.failures.set(entry.rank, entry.before);
       else this.failures.delete(entry.rank);
     }
-    for (let i = logRanks.length - 1; i >= mark.values; i--) {
+    for (let i = this.logged - 1; i >= mark.values; i--) {
       const rank = logRanks[i] as number;
       values[rank] = logValues[i] as number;
       checks.update(rank, values[rank]);
@@ -161,20 +179,31 @@ export class Propagation {
   }
 
   private forget(values: number, failures: number): void {
-    this.logRanks.length = values;
-    this.logValues.length = values;
-    this.failureLog.length = failures;
+    this.logged = values;
+    if (this.failureLog.length > failures) this.failureLog.length = failures;
   }
 
   /** Notes a new value: log, what depends on it, its checks. */
   private changed(rank: number, before: number, after: number): void {
     const { dependantStarts, dependants } = this.program;
-    this.logRanks.push(rank);
-    this.logValues.push(before);
+    if (this.logged === this.logRanks.length) this.growLog();
+    this.logRanks[this.logged] = rank;
+    this.logValues[this.logged] = before;
+    this.logged += 1;
     this.values[rank] = after;
     const end = dependantStarts[rank + 1] as number;
     for (let i = dependantStarts[rank] as number; i < end; i++) this.dirty.add(dependants[i] as number);
     this.checks.update(rank, after);
+  }
+
+  /** One pass logs each rank at most once; what-ifs inside what-ifs need more room. */
+  private growLog(): void {
+    const ranks = new Int32Array(2 * this.logRanks.length + 16);
+    const values = new Float64Array(ranks.length);
+    ranks.set(this.logRanks);
+    values.set(this.logValues);
+    this.logRanks = ranks;
+    this.logValues = values;
   }
 
   /** Stores a value or failure if it differs from what stands; a failure for another reason counts as different. */
@@ -192,7 +221,7 @@ export class Propagation {
 
   /** The slow way, for formulas that fail or failed: the tree says why. */
   private storeFormula(rank: number, computed: number): void {
-    const formula = this.program.formulas.get(rank);
+    const formula = this.program.formulas[rank];
     if (!formula || Number.isFinite(computed)) {
       this.store(rank, computed, undefined);
       return;

@@ -153,7 +153,7 @@ function byTrees(spec: ModelSpec): ReadonlyMap<string, number | Failure> {
 }
 
 describe('properties of the engine on random models', () => {
-  const runs = { numRuns: 1000 };
+  const runs = { numRuns: 400 };
 
   it('the tape computes what the trees compute, failures included', () => {
     fc.assert(

@@ -28,7 +28,7 @@ export class TapeModel implements Model {
     const place = this.checks.place(checkId);
     if (place === undefined) throw new Error(`The model has no check ${checkId}`);
     const outcome = this.outcomeAt(this.checks.nodeOf(place));
-    return outcome.ok ? { ok: true, value: this.checks.margins[place] as number } : outcome;
+    return outcome.ok ? { ok: true, value: this.checks.margin(place, outcome.value) } : outcome;
   }
 
   set(changes: Changes): readonly string[] {

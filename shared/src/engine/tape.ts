@@ -12,8 +12,6 @@ export const enum Op {
   Multiply,
   Divide,
   Power,
-  /** NaN instead of an infinite value, before an operation that would swallow the infinity. */
-  Finite,
   Less,
   LessOrEqual,
   Equal,
@@ -50,12 +48,36 @@ export const enum Op {
   Ceil,
   Round,
   Sign,
+  // Two instructions in one step; the second stands behind the first and gives its destination and other operand c.
+  /** a * b * c */
+  MultiplyMultiply,
+  /** a * b + c */
+  MultiplyAdd,
+  /** a * b - c */
+  MultiplySubtract,
+  /** c - a * b */
+  SubtractProduct,
+  /** a * b / c */
+  MultiplyDivide,
+  /** c / (a * b) */
+  DivideByProduct,
+  /** (a + b) * c */
+  AddMultiply,
+  /** a + b + c */
+  AddAdd,
+  /** c / (a + b) */
+  DivideBySum,
+  /** (a - b) * c */
+  SubtractMultiply,
 }
 
 /** Numbers per instruction. */
 export const STRIDE = 4;
 
-/** Runs the instructions from `from` (included) to `to` (excluded) over the values. */
+/**
+ * Runs the instructions from `from` (included) to `to` (excluded) over the values. An operation that would make a
+ * finite number of an infinite argument gives NaN instead, so that no overflow on the way is lost.
+ */
 export function run(code: Int32Array, values: Float64Array, from: number, to: number): void {
   for (let pc = from; pc < to; pc += STRIDE) {
     const target = code[pc + 1] as number;
@@ -72,8 +94,70 @@ export function run(code: Int32Array, values: Float64Array, from: number, to: nu
         values[target] = a * b;
         break;
       case Op.Divide:
-        values[target] = a / b;
+        values[target] = b - b === 0 ? a / b : NaN;
         break;
+      case Op.MultiplyMultiply: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = a * b * c;
+        pc += STRIDE;
+        break;
+      }
+      case Op.MultiplyAdd: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = a * b + c;
+        pc += STRIDE;
+        break;
+      }
+      case Op.MultiplySubtract: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = a * b - c;
+        pc += STRIDE;
+        break;
+      }
+      case Op.SubtractProduct: {
+        const c = values[code[pc + 6] as number] as number;
+        values[code[pc + 5] as number] = c - a * b;
+        pc += STRIDE;
+        break;
+      }
+      case Op.MultiplyDivide: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = c - c === 0 ? (a * b) / c : NaN;
+        pc += STRIDE;
+        break;
+      }
+      case Op.DivideByProduct: {
+        const c = values[code[pc + 6] as number] as number;
+        const product = a * b;
+        values[code[pc + 5] as number] = product - product === 0 ? c / product : NaN;
+        pc += STRIDE;
+        break;
+      }
+      case Op.AddMultiply: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = (a + b) * c;
+        pc += STRIDE;
+        break;
+      }
+      case Op.AddAdd: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = a + b + c;
+        pc += STRIDE;
+        break;
+      }
+      case Op.DivideBySum: {
+        const c = values[code[pc + 6] as number] as number;
+        const sum = a + b;
+        values[code[pc + 5] as number] = sum - sum === 0 ? c / sum : NaN;
+        pc += STRIDE;
+        break;
+      }
+      case Op.SubtractMultiply: {
+        const c = values[code[pc + 7] as number] as number;
+        values[code[pc + 5] as number] = (a - b) * c;
+        pc += STRIDE;
+        break;
+      }
       case Op.Copy:
         values[target] = a;
         break;
@@ -81,98 +165,116 @@ export function run(code: Int32Array, values: Float64Array, from: number, to: nu
         values[target] = -a;
         break;
       case Op.Power:
-        values[target] = a !== a ? NaN : Math.pow(a, b);
-        break;
-      case Op.Finite:
-        values[target] = a - a === 0 ? a : NaN;
+        values[target] = finite(a, b) ? Math.pow(a, b) : NaN;
         break;
       case Op.Less:
-        values[target] = a < b ? 1 : a >= b ? 0 : NaN;
+        values[target] = finite(a, b) ? (a < b ? 1 : 0) : NaN;
         break;
       case Op.LessOrEqual:
-        values[target] = a <= b ? 1 : a > b ? 0 : NaN;
+        values[target] = finite(a, b) ? (a <= b ? 1 : 0) : NaN;
         break;
       case Op.Equal:
-        values[target] = a === b ? 1 : a !== a || b !== b ? NaN : 0;
+        values[target] = finite(a, b) ? (a === b ? 1 : 0) : NaN;
         break;
       case Op.NotEqual:
-        values[target] = a === b ? 0 : a !== a || b !== b ? NaN : 1;
+        values[target] = finite(a, b) ? (a === b ? 0 : 1) : NaN;
         break;
       case Op.Select:
         pc += STRIDE;
-        values[target] = a === 0 ? (values[code[pc + 2] as number] as number) : a !== a ? NaN : b;
+        values[target] = a === 0 ? (values[code[pc + 2] as number] as number) : a - a === 0 ? b : NaN;
         break;
       case Op.Min:
-        values[target] = Math.min(a, b);
+        values[target] = finite(a, b) ? Math.min(a, b) : NaN;
         break;
       case Op.Max:
-        values[target] = Math.max(a, b);
+        values[target] = finite(a, b) ? Math.max(a, b) : NaN;
         break;
       case Op.Hypot:
         values[target] = Math.hypot(a, b);
         break;
       case Op.Atan2:
-        values[target] = Math.atan2(a, b);
+        values[target] = finite(a, b) ? Math.atan2(a, b) : NaN;
         break;
-      default:
-        values[target] = unary(code[pc] as number, a);
+      case Op.Sqrt:
+        values[target] = Math.sqrt(a);
+        break;
+      case Op.Cbrt:
+        values[target] = Math.cbrt(a);
+        break;
+      case Op.Exp:
+        values[target] = a - a === 0 ? Math.exp(a) : NaN;
+        break;
+      case Op.Expm1:
+        values[target] = a - a === 0 ? Math.expm1(a) : NaN;
+        break;
+      case Op.Log:
+        values[target] = Math.log(a);
+        break;
+      case Op.Log10:
+        values[target] = Math.log10(a);
+        break;
+      case Op.Log2:
+        values[target] = Math.log2(a);
+        break;
+      case Op.Log1p:
+        values[target] = Math.log1p(a);
+        break;
+      case Op.Sin:
+        values[target] = Math.sin(a);
+        break;
+      case Op.Cos:
+        values[target] = Math.cos(a);
+        break;
+      case Op.Tan:
+        values[target] = Math.tan(a);
+        break;
+      case Op.Asin:
+        values[target] = Math.asin(a);
+        break;
+      case Op.Acos:
+        values[target] = Math.acos(a);
+        break;
+      case Op.Atan:
+        values[target] = a - a === 0 ? Math.atan(a) : NaN;
+        break;
+      case Op.Sinh:
+        values[target] = Math.sinh(a);
+        break;
+      case Op.Cosh:
+        values[target] = Math.cosh(a);
+        break;
+      case Op.Tanh:
+        values[target] = a - a === 0 ? Math.tanh(a) : NaN;
+        break;
+      case Op.Asinh:
+        values[target] = Math.asinh(a);
+        break;
+      case Op.Acosh:
+        values[target] = Math.acosh(a);
+        break;
+      case Op.Atanh:
+        values[target] = Math.atanh(a);
+        break;
+      case Op.Abs:
+        values[target] = Math.abs(a);
+        break;
+      case Op.Floor:
+        values[target] = Math.floor(a);
+        break;
+      case Op.Ceil:
+        values[target] = Math.ceil(a);
+        break;
+      case Op.Round:
+        values[target] = roundHalfAway(a);
+        break;
+      case Op.Sign:
+        values[target] = a - a === 0 ? Math.sign(a) : NaN;
+        break;
     }
   }
 }
 
-function unary(op: Op, x: number): number {
-  switch (op) {
-    case Op.Sqrt:
-      return Math.sqrt(x);
-    case Op.Cbrt:
-      return Math.cbrt(x);
-    case Op.Exp:
-      return Math.exp(x);
-    case Op.Expm1:
-      return Math.expm1(x);
-    case Op.Log:
-      return Math.log(x);
-    case Op.Log10:
-      return Math.log10(x);
-    case Op.Log2:
-      return Math.log2(x);
-    case Op.Log1p:
-      return Math.log1p(x);
-    case Op.Sin:
-      return Math.sin(x);
-    case Op.Cos:
-      return Math.cos(x);
-    case Op.Tan:
-      return Math.tan(x);
-    case Op.Asin:
-      return Math.asin(x);
-    case Op.Acos:
-      return Math.acos(x);
-    case Op.Atan:
-      return Math.atan(x);
-    case Op.Sinh:
-      return Math.sinh(x);
-    case Op.Cosh:
-      return Math.cosh(x);
-    case Op.Tanh:
-      return Math.tanh(x);
-    case Op.Asinh:
-      return Math.asinh(x);
-    case Op.Acosh:
-      return Math.acosh(x);
-    case Op.Atanh:
-      return Math.atanh(x);
-    case Op.Abs:
-      return Math.abs(x);
-    case Op.Floor:
-      return Math.floor(x);
-    case Op.Ceil:
-      return Math.ceil(x);
-    case Op.Round:
-      return roundHalfAway(x);
-    case Op.Sign:
-      return Math.sign(x);
-    default:
-      throw new Error(`The tape has no operation ${op}`);
-  }
+/** Whether both numbers are finite: the difference of such a number to itself is 0, of any other NaN. */
+function finite(a: number, b: number): boolean {
+  return a - a === 0 && b - b === 0;
 }
