@@ -12,6 +12,8 @@ const packages = [
   postgresPackage,
   program('chromium', 'chromium'),
   program('soffice', 'libreoffice-writer-nogui'),
+  // The spreadsheet part of it is a package of its own.
+  { package: 'libreoffice-calc-nogui', presentIf: () => existsSync('/usr/lib/libreoffice/program/libsclo.so') },
   program('units', 'units'),
   program('xmllint', 'libxml2-utils'),
   program('pdftotext', 'poppler-utils'),

@@ -30,35 +30,35 @@ interface PrintedColumn {
 const COLUMNS: readonly PrintedColumn[] = [
   {
     heading: 'Identifier, version, parents',
-    width: 1350,
+    width: 1500,
     lines: (row) => [
       row.key,
       `version ${row.version}`,
       row.parents.length > 0 ? `from ${row.parents.join(', ')}` : 'top level',
     ],
   },
-  { heading: 'Requirement', width: 3700, lines: (row) => [row.title, row.text] },
-  { heading: 'Required value', width: 1500, lines: (row) => [requiredInWords(row)] },
+  { heading: 'Requirement', width: 4300, lines: (row) => [row.title, row.text] },
+  { heading: 'Required value', width: 1700, lines: (row) => [requiredInWords(row)] },
   {
     heading: 'Method, level, stage, success criterion',
-    width: 1600,
+    width: 1900,
     lines: (row) => [row.method, row.level, row.stage, row.criterion],
   },
-  { heading: 'Assessed value ± U', width: 1500, lines: (row) => [assessedInWords(row)] },
-  { heading: 'Margin, policy', width: 1700, lines: (row) => [marginInWords(row), row.policy] },
+  { heading: 'Assessed value ± U', width: 1700, lines: (row) => [assessedInWords(row)] },
+  { heading: 'Margin, policy', width: 2000, lines: (row) => [marginInWords(row), row.policy] },
   {
     heading: 'Verdict, compliance, basis',
-    width: 1500,
+    width: 1700,
     lines: (row) => [row.verdict, `compliance ${row.compliance}`, row.basis ?? ''],
   },
-  { heading: 'Evidence, placard', width: 1900, lines: (row) => [row.evidence, row.placard] },
-  { heading: 'Departure', width: 1400, lines: (row) => [row.departure] },
-  { heading: 'Close-out, reason', width: 1900, lines: (row) => [row.closeOut, row.reason] },
-  { heading: 'Owner, signature', width: 1700, lines: (row) => [row.owner, row.signature] },
+  { heading: 'Evidence, placard', width: 2000, lines: (row) => [row.evidence, row.placard] },
+  { heading: 'Departure', width: 1600, lines: (row) => [row.departure] },
+  { heading: 'Close-out, reason', width: 2000, lines: (row) => [row.closeOut, row.reason] },
+  { heading: 'Owner, signature', width: 1600, lines: (row) => [row.owner, row.signature] },
 ];
 
 const FONT = 'Arial';
-const SMALL = 14;
+const SMALL = 16;
 const rule = { style: BorderStyle.SINGLE, size: 4, color: 'B9B2A3' };
 const none = { style: BorderStyle.NONE, size: 0, color: 'FFFFFF' };
 
@@ -89,7 +89,7 @@ export async function matrixDocx(view: ComplianceView): Promise<Buffer> {
         children: [
           cell([name], 3000),
           new TableCell({
-            width: { size: 16750, type: WidthType.DXA },
+            width: { size: 19000, type: WidthType.DXA },
             borders: { top: rule, bottom: rule, left: none, right: none },
             children: [paragraph(value)],
           }),
@@ -156,8 +156,8 @@ export async function matrixDocx(view: ComplianceView): Promise<Buffer> {
           paragraph(header.caution, { size: 20 }),
           new Paragraph({ children: [] }),
           new Table({
-            width: { size: 19750, type: WidthType.DXA },
-            columnWidths: [3000, 16750],
+            width: { size: 22000, type: WidthType.DXA },
+            columnWidths: [3000, 19000],
             layout: TableLayoutType.FIXED,
             rows: about,
           }),
@@ -169,7 +169,7 @@ export async function matrixDocx(view: ComplianceView): Promise<Buffer> {
             ],
           }),
           new Table({
-            width: { size: 19750, type: WidthType.DXA },
+            width: { size: 22000, type: WidthType.DXA },
             columnWidths: COLUMNS.map(({ width }) => width),
             layout: TableLayoutType.FIXED,
             rows: [head, ...body],

@@ -6,7 +6,7 @@ const unitOfRow = (row: MatrixRow): string => row.limit?.value.unit ?? row.value
 
 /** "≥ 38.0 km/s at a delivered cargo of 20.0 t". */
 export function requiredInWords(row: MatrixRow): string {
-  return row.limit ? [limitInWords(row.limit), row.limit.condition].filter(Boolean).join(' ') : 'no limit';
+  return row.limit ? limitInWords(row.limit) : 'no limit';
 }
 
 /** "39.08 km/s ± 0.9 km/s (k = 2)", or that no uncertainty is stated, or that there is no value. */

@@ -57,10 +57,12 @@ export class EditService {
           { isolationLevel: Transaction.ISOLATION_LEVELS.READ_COMMITTED },
           async (transaction) => {
             const { current, at } = await this.store.locked(editor.studyId, transaction);
-            const commands =
+            // Identifiers first, so that the answer can say which command made what.
+            const commands = named(
               request.draft === undefined
                 ? request.commands
-                : [intoDraft(current.proof.study, request.draft, request.commands)];
+                : [intoDraft(current.proof.study, request.draft, request.commands)],
+            );
             const edit = await this.apply(
               current,
               editor,
@@ -323,26 +325,20 @@ function historyOf(before: Proof, edit: Applied): HistoryRow[] {
   });
 }
 
-/** What each creating command made, in order: creations of a kind come out of the patch in the order of their commands. */
+/** Commands that create something, with the identifier they will create it under. */
+function named(commands: readonly Command[]): readonly Command[] {
+  return commands.map((command) =>
+    'version' in command || command.type === 'edit.undo' || command.id ? command : { ...command, id: newId() },
+  );
+}
+
+/** What each creating command made, with the key it got. */
 function createdBy(commands: readonly Command[], patch: Patch): EditAnswer['created'] {
-  const created: { command: number; id: string; key: string }[] = [];
-  const taken = new Set<string>();
-  commands.forEach((command, index) => {
-    if ('version' in command || command.type === 'edit.undo') return;
-    const kind = command.type.split('.')[0];
-    const entry = patch.find(
-      (one) =>
-        one.kind === kind &&
-        !one.before &&
-        one.after &&
-        !taken.has(one.id) &&
-        (command.id === undefined || one.id === command.id),
-    );
-    if (!entry?.after) return;
-    taken.add(entry.id);
-    created.push({ command: index, id: entry.id, key: 'key' in entry.after ? entry.after.key : '' });
+  return commands.flatMap((command, index) => {
+    if ('version' in command || command.type === 'edit.undo') return [];
+    const entry = patch.find((one) => one.id === command.id && !one.before);
+    return entry?.after ? [{ command: index, id: entry.id, key: 'key' in entry.after ? entry.after.key : '' }] : [];
   });
-  return created;
 }
 
 async function personNames(): Promise<Map<string, string>> {
