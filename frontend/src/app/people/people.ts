@@ -6,7 +6,7 @@ import { type Observable } from 'rxjs';
 import { ErrorLine } from '../core/errors/error-line';
 import { load } from '../core/http/load';
 import { SessionStore } from '../core/session/session-store';
-import { roleName } from '../core/study/role-name';
+import { roleList } from '../core/study/role-name';
 import { TitleBlock } from '../core/title-block';
 import { Ask } from '../ui/ask/ask';
 import { Waiting } from '../ui/waiting/waiting';
@@ -43,7 +43,7 @@ export class People {
         .map((membership) => ({
           key: membership.study.key,
           name: membership.study.name,
-          roles: membership.roles.map(roleName).join(', '),
+          roles: roleList(membership.roles),
         })),
     })),
   );

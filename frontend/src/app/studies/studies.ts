@@ -3,7 +3,7 @@ import { MatDialog } from '@angular/material/dialog';
 import { Router, RouterLink } from '@angular/router';
 import type { StudySummary } from '@shared/contract';
 import { load } from '../core/http/load';
-import { roleName } from '../core/study/role-name';
+import { roleList } from '../core/study/role-name';
 import { TitleBlock } from '../core/title-block';
 import { EmptyState } from '../ui/empty-state/empty-state';
 import { VerdictMark } from '../ui/verdict/verdict-mark';
@@ -119,10 +119,7 @@ export class Studies {
       standing: standing(study.counts),
       counts: countsOf(study),
       facts: [study.concept, study.phase && `phase ${study.phase}`].filter((fact) => fact !== '').join(' · '),
-      roles:
-        study.roles.length === 0
-          ? 'You have no role here'
-          : `You act as ${study.roles.map(roleName).join(', ').toLowerCase()}`,
+      roles: study.roles.length === 0 ? 'You have no role here' : `You act as ${roleList(study.roles).toLowerCase()}`,
     })),
   );
 

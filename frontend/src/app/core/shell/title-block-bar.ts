@@ -5,7 +5,7 @@ import { MatDialog } from '@angular/material/dialog';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
 import { interval, map } from 'rxjs';
 import { ErrorLine } from '../errors/error-line';
-import { roleName } from '../study/role-name';
+import { roleList } from '../study/role-name';
 import { describeStandpoint, isFrozen } from '../study/standpoint';
 import { StudyContext } from '../study/study-context';
 import { type SheetAction, TitleBlock } from '../title-block';
@@ -50,10 +50,7 @@ export class TitleBlockBar {
     const when = this.isFrozen() ? '' : `${ago(head.provedAt, Math.max(this.clock(), Date.now()))}, `;
     return `${when}${head.verdicts} verdicts`;
   });
-  protected readonly acting = computed(() => {
-    const roles = this.context.roles().map(roleName);
-    return roles.map((role, index) => (index === 0 ? role : role.toLowerCase())).join(', ') || 'Guest';
-  });
+  protected readonly acting = computed(() => roleList(this.context.roles()) || 'Guest');
 
   /** "Petrel · now, r418 · you act as board member" */
   protected readonly inOneLine = computed(() => {

@@ -8,3 +8,8 @@ export function roleName(role: Role): string {
   const words = role.replaceAll('-', ' ');
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
+
+/** Several roles in one phrase: "Analyst, board member"; empty for none. */
+export function roleList(roles: readonly Role[]): string {
+  return roles.map((role, index) => (index === 0 ? roleName(role) : roleName(role).toLowerCase())).join(', ');
+}
