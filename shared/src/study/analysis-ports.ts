@@ -249,7 +249,9 @@ function checkMethodInputs(study: Study, analysis: Analysis): void {
         binding.name,
         `${method.name} takes ${ports.map((p) => p.name).join(', ')}.`,
       );
-    const { dimension: given, temperature } = scope.get(binding.name)!;
+    const source = scope.get(binding.name);
+    if (!source) throw new Error(`the input ${binding.name} was bound and is not in scope`);
+    const { dimension: given, temperature } = source;
     const needed = knownDimension(port.unit);
     if (given !== needed) {
       throw invalid(

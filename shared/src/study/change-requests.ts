@@ -16,7 +16,7 @@ export function withIds(edits: readonly Command[], newId: () => string): Command
   return edits.flatMap((edit) => {
     if ('version' in edit || edit.type === 'edit.undo') return [edit];
     const id = edit.id ?? newId();
-    if (edit.type !== 'requirement.create') return [{ ...edit, id } as Command];
+    if (edit.type !== 'requirement.create') return [{ ...edit, id }];
     const traces = [...new Set(edit.parentIds)].map((parentId): Command => ({
       type: 'trace.link',
       id: newId(),

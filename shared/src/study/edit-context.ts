@@ -1,4 +1,4 @@
-import type { Command, CommandOf, CommandType, EntityKind, EntityKinds, Role } from '@shared/contract';
+import type { Command, CommandOf, CommandType, EntityKind, EntityKinds, Patch, Role } from '@shared/contract';
 import { Refusal } from './refusal';
 import type { Study } from './study';
 
@@ -18,9 +18,7 @@ export interface EditContext {
   readonly revision: number;
   readonly authority: Authority;
   /** Patch of an earlier revision, for undo; null when it is not there or not the actor's own. */
-  readonly patchOf: (
-    revision: number,
-  ) => { readonly patch: import('@shared/contract').Patch; readonly actorId: string } | null;
+  readonly patchOf: (revision: number) => { readonly patch: Patch; readonly actorId: string } | null;
   /** Names of people, for sentences. */
   readonly personName: (id: string) => string;
 }
@@ -144,7 +142,7 @@ export function revised<K extends EntityKind>(
   entity: EntityKinds[K],
   changes: Partial<EntityKinds[K]>,
 ): void {
-  study.put(kind, { ...entity, ...changes, version: entity.version + 1 } as EntityKinds[K]);
+  study.put(kind, { ...entity, ...changes, version: entity.version + 1 });
 }
 
 /** Drops undefined fields: only what a command gives is revised. */

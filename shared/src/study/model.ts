@@ -88,9 +88,9 @@ function addMethod(analysis: Analysis, functions: FunctionSpec[], inputs: InputS
     outputs: method.outputs.map((port) => outputNode(analysis.id, port.name)),
     label: analysis.key,
     compute: (values) => {
-      const result = method.compute(Object.fromEntries(ports.map((port, index) => [port.name, values[index]!])));
+      const result = method.compute(Object.fromEntries(ports.map((port, index) => [port.name, values[index] ?? NaN])));
       if (!result.ok) return { ok: false, message: `${analysis.key}, ${method.name}: ${result.message}` };
-      return { ok: true, values: method.outputs.map((port) => result.outputs[port.name]!) };
+      return { ok: true, values: method.outputs.map((port) => result.outputs[port.name] ?? NaN) };
     },
   });
 }

@@ -26,11 +26,16 @@ export class Refusal extends Error {
 }
 
 /** Refuses bad input: names the field, the value given and what would be right. */
-export function invalid(field: string, value: unknown, expected: string, range?: RefusalDetails['range']): Refusal {
-  const shown = value === null || value === undefined || value === '' ? 'nothing' : `“${String(value)}”`;
+export function invalid(
+  field: string,
+  value: string | null | undefined,
+  expected: string,
+  range?: RefusalDetails['range'],
+): Refusal {
+  const shown = value ? `“${value}”` : 'nothing';
   return new Refusal('invalid', `${field}: ${shown} was given; ${expected}`, {
     field,
-    value: value === null || value === undefined ? '' : String(value),
+    value: value ?? '',
     expected,
     range,
   });

@@ -41,20 +41,27 @@ export class Study {
   /** A copy that no longer sees its base: what is there now, whatever the base becomes. */
   detached(): Study {
     const copy = new Study();
-    for (const kind of ENTITY_KINDS) for (const entity of this.all(kind)) copy.put(kind, entity as never);
+    for (const kind of ENTITY_KINDS) for (const entity of this.all(kind)) copy.put(kind, entity);
     return copy;
   }
 
   /** The entity, or undefined when there is none of that identifier. */
   get<K extends EntityKind>(kind: K, id: string): EntityKinds[K] | undefined {
-    const own = this.tables.get(kind)!.get(id);
+    const own = this.table(kind).get(id);
     if (own !== undefined) return (own ?? undefined) as EntityKinds[K] | undefined;
     return this.base?.get(kind, id);
   }
 
+  /** An entity that another one of the study refers to; such references hold in every state that was accepted. */
+  held<K extends EntityKind>(kind: K, id: string): EntityKinds[K] {
+    const entity = this.get(kind, id);
+    if (!entity) throw new Error(`the study refers to ${kind} ${id}, which it does not hold`);
+    return entity;
+  }
+
   /** All entities of a kind, in order of identifier (which is the order of creation). */
   all<K extends EntityKind>(kind: K): EntityKinds[K][] {
-    const own = this.tables.get(kind)!;
+    const own = this.table(kind);
     const list = [...own.values()].filter((entity) => entity !== null) as EntityKinds[K][];
     if (this.base) for (const entity of this.base.all(kind)) if (!own.has(entity.id)) list.push(entity);
     return list.sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
@@ -67,7 +74,7 @@ export class Study {
     value: string | null,
   ): EntityKinds[K][] {
     const found: EntityKinds[K][] = [];
-    const own = this.tables.get(kind)!;
+    const own = this.table(kind);
     for (const id of this.indexes.get(`${kind}.${field}`)?.get(value) ?? []) found.push(own.get(id) as EntityKinds[K]);
     if (this.base) for (const entity of this.base.find(kind, field, value)) if (!own.has(entity.id)) found.push(entity);
     return found.sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
@@ -78,7 +85,7 @@ export class Study {
     kind: K,
     key: string,
   ): EntityKinds[K] | undefined {
-    return this.find(kind, 'key' as never, key)[0];
+    return this.find(kind, 'key', key)[0];
   }
 
   /** The settings; every loaded study has them. */
@@ -102,7 +109,7 @@ export class Study {
   patch(): Patch {
     const entries: PatchEntry[] = [];
     for (const kind of ENTITY_KINDS) {
-      const ids = [...this.tables.get(kind)!.keys()].sort();
+      const ids = [...this.table(kind).keys()].sort();
       for (const id of ids) {
         const before = this.base?.get(kind, id) ?? null;
         const after = this.get(kind, id) ?? null;
@@ -117,8 +124,14 @@ export class Study {
     for (const entry of patch) this.write(entry.kind, entry.id, entry.after);
   }
 
+  private table(kind: EntityKind): Table {
+    const table = this.tables.get(kind);
+    if (!table) throw new Error(`there is no table of kind ${kind}`);
+    return table;
+  }
+
   private write(kind: EntityKind, id: string, entity: Stored | null): void {
-    const table = this.tables.get(kind)!;
+    const table = this.table(kind);
     this.reindex(kind, id, table.get(id) ?? null, entity);
     if (entity === null && !this.base) table.delete(id);
     else table.set(id, entity);
@@ -128,7 +141,7 @@ export class Study {
     for (const field of INDEXED[kind]) {
       const name = `${kind}.${field}`;
       let index = this.indexes.get(name);
-      if (!index) this.indexes.set(name, (index = new Map()));
+      if (!index) this.indexes.set(name, (index = new Map<unknown, Set<string>>()));
       const value = (entity: Stored): unknown => (entity as unknown as Record<string, unknown>)[field];
       if (before) index.get(value(before))?.delete(id);
       if (after) {

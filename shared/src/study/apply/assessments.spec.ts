@@ -41,7 +41,7 @@ function take(requirementIds: string[], more: object = {}): Command {
     quantityIds: [],
     openItems: 'listed',
     ...more,
-  } as Command;
+  };
 }
 
 describe('lowering compliance', () => {
@@ -149,7 +149,7 @@ function departure(more: object = {}): Command {
     effectivity: 'article 1',
     expires: null,
     ...more,
-  } as Command;
+  };
 }
 
 describe('departures', () => {
@@ -166,7 +166,7 @@ describe('departures', () => {
     expect(refused(study, MEMBER, decide)).toMatchObject({ code: 'forbidden' });
     expect(refused(study, CHAIR, { type: 'departure.expire', id: idOf(90), version: 1 }).code).toBe('state');
     edit(study, CHAIR, decide);
-    expect(refused(study, CHAIR, { ...decide, version: 2 } as Command).code).toBe('state');
+    expect(refused(study, CHAIR, { ...decide, version: 2 }).code).toBe('state');
   });
 });
 

@@ -186,7 +186,7 @@ function withoutEdit(edits: readonly Command[], dropped: number): Command[] {
   return edits.flatMap((edit, index) => {
     if (index === dropped) return [];
     const follows = index > dropped && gone && 'version' in gone && 'version' in edit && edit.id === gone.id;
-    return [follows ? ({ ...edit, version: Math.max(1, edit.version - 1) } as Command) : edit];
+    return [follows ? { ...edit, version: Math.max(1, edit.version - 1) } : edit];
   });
 }
 

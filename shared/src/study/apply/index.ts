@@ -1,5 +1,5 @@
 import { mayGive, ROLE_NAMES, COMMAND_ROLES } from '@shared/contract';
-import type { Command, CommandOf, CommandType } from '@shared/contract';
+import type { Command, CommandType } from '@shared/contract';
 import type { Apply, EditContext } from '../edit-context';
 import { refuseDangling } from '../integrity';
 import { Refusal } from '../refusal';
@@ -86,7 +86,7 @@ export function applyCommands(
     list.forEach((command, index) => {
       try {
         if (inner.authority === 'direct') refuseRole(command, inner);
-        (table[command.type] as Apply<CommandType>)(fork, command as CommandOf<CommandType>, inner);
+        (table[command.type] as Apply<CommandType>)(fork, command, inner);
       } catch (error) {
         if (error instanceof Refusal) error.command = index;
         throw error;

@@ -1,4 +1,4 @@
-import type { CommandOf, Limit, Requirement, Trace } from '@shared/contract';
+import type { Limit, Requirement, Trace } from '@shared/contract';
 import { isTemperature, knownDimension, outputsOf, temperatureInWords } from '../analysis-ports';
 import {
   type Apply,
@@ -194,7 +194,7 @@ export const linkTrace: Apply<'trace.link'> = (study, command, context) => {
   }
   const path = pathUp(study, parent.id, child.id);
   if (path) {
-    const keys = [...path.map((id) => study.get('requirement', id)!.key), parent.key];
+    const keys = [...path.map((id) => study.held('requirement', id).key), parent.key];
     throw new Refusal('cycle', `This would make a circle in the flow-down: ${keys.join(' → ')} → ${child.key}.`, {
       field: 'parentId',
       value: parent.key,
@@ -229,7 +229,7 @@ export const unlinkTrace: Apply<'trace.unlink'> = (study, command, context) => {
 };
 
 function refuseAdoptedShare(study: Study, trace: Trace, context: EditContext): void {
-  const parent = study.get('requirement', trace.parentId)!;
+  const parent = study.held('requirement', trace.parentId);
   if (trace.share === 'adopted' && parent.state === 'baselined')
     refuseControlled(context, parent.key, 'is baselined with this share in its budget');
 }
@@ -246,7 +246,7 @@ export const setBudget: Apply<'budget.set'> = (study, command, context) => {
 /** Proposes a child's limit as a share of the parent's budget, or takes the proposal back. */
 export const proposeShare: Apply<'budget.propose'> = (study, command, context) => {
   const trace = target(study, 'trace', command);
-  const child = study.get('requirement', trace.childId)!;
+  const child = study.held('requirement', trace.childId);
   refuseAdoptedShare(study, trace, context);
   refuseUnlessEditable(child, context);
   if (command.share === 'proposed') refuseUnfitShare(study, trace);
@@ -254,8 +254,8 @@ export const proposeShare: Apply<'budget.propose'> = (study, command, context) =
 };
 
 function refuseUnfitShare(study: Study, trace: Trace): void {
-  const parent = study.get('requirement', trace.parentId)!;
-  const child = study.get('requirement', trace.childId)!;
+  const parent = study.held('requirement', trace.parentId);
+  const child = study.held('requirement', trace.childId);
   if (!parent.budget || !parent.limit)
     throw invalid('share', parent.key, `${parent.key} has no budget to take a share of; give it one first.`);
   if (!child.limit) throw invalid('share', child.key, `the share is the limit of ${child.key}; give it one first.`);
@@ -272,8 +272,8 @@ function refuseUnfitShare(study: Study, trace: Trace): void {
 
 /** Adopts a share into the parent's budget; a baselined parent takes one only by change request. */
 export const adoptShare: Apply<'budget.adopt'> = (study, command, context) => {
-  const trace = target(study, 'trace', command as CommandOf<'budget.adopt'>);
-  const parent = study.get('requirement', trace.parentId)!;
+  const trace = target(study, 'trace', command);
+  const parent = study.held('requirement', trace.parentId);
   if (parent.state === 'baselined')
     refuseControlled(context, parent.key, 'is baselined; its budget takes a new share only by an approved change');
   refuseUnfitShare(study, trace);

@@ -61,7 +61,7 @@ export const reviseElement: Apply<'element.revise'> = (study, command) => {
       if (above.id === element.id) {
         throw new Refusal(
           'cycle',
-          `${element.key} cannot be moved below ${labelOf(study, 'element', study.get('element', changes.parentId)!)}, which is part of it.`,
+          `${element.key} cannot be moved below ${labelOf(study, 'element', study.held('element', changes.parentId))}, which is part of it.`,
           {
             field: 'changes.parentId',
             value: changes.parentId,

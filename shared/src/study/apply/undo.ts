@@ -48,9 +48,7 @@ export const undoEdit: Apply<'edit.undo'> = (study, command, context) => {
       );
     const current = study.get(change.kind, change.id);
     if ((current?.version ?? 0) !== (change.after?.version ?? 0)) {
-      const label = current
-        ? labelOf(study, change.kind, current as EntityKinds[typeof change.kind])
-        : 'What it touched';
+      const label = current ? labelOf(study, change.kind, current) : 'What it touched';
       throw new Refusal(
         'conflict',
         `${label} has been edited again since revision ${command.revision}; take the later edit back first, or edit it by hand.`,
@@ -63,7 +61,7 @@ export const undoEdit: Apply<'edit.undo'> = (study, command, context) => {
       return;
     }
     const version = (change.after?.version ?? change.before.version) + 1;
-    study.put(change.kind, { ...change.before, version } as EntityKinds[typeof change.kind]);
+    study.put(change.kind, { ...change.before, version });
   }
 
   function refuseNowControlled(change: PatchEntry, current: unknown): void {

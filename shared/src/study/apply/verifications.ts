@@ -29,7 +29,7 @@ function refuseBaselined(study: Study, requirementId: string, context: EditConte
 
 /** Refuses a link that does not hold: no analysis, no such output, another dimension than the limit. */
 export function refuseUnfit(study: Study, verification: Verification): void {
-  const requirement = study.get('requirement', verification.requirementId)!;
+  const requirement = study.held('requirement', verification.requirementId);
   if (verification.method !== 'analysis') {
     if (verification.analysisId)
       throw invalid(
@@ -128,7 +128,7 @@ export const unlinkVerification: Apply<'verification.unlink'> = (study, command,
 /** Records a person's finding with its evidence, for test, inspection, demonstration and review of design, or where no limit is stated. */
 export const recordFinding: Apply<'verification.record'> = (study, command, context) => {
   const verification = target(study, 'verification', command);
-  const requirement = study.get('requirement', verification.requirementId)!;
+  const requirement = study.held('requirement', verification.requirementId);
   if (requirement.state === 'withdrawn')
     throw new Refusal('state', `${requirement.key} is withdrawn.`, {
       field: 'id',

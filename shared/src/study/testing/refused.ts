@@ -19,7 +19,7 @@ export function refused(
   } catch (error) {
     if (!(error instanceof Refusal)) throw error;
     if (JSON.stringify(study.all('requirement').concat(study.all('quantity') as never)) !== before)
-      throw new Error('a refused edit changed the study');
+      throw new Error('a refused edit changed the study', { cause: error });
     return error;
   }
   throw new Error(`accepted, though it should be refused: ${list.map(({ type }) => type).join(', ')}`);

@@ -53,7 +53,7 @@ export function walkEdits(
     }
     drift.set(edit.id, current.version - edit.version);
     visit(fork, edit, index, current.version === expected ? '' : moved(labelOf(fork, kind, current), edit, current));
-    applied({ ...edit, version: current.version } as Command);
+    applied({ ...edit, version: current.version });
   });
 
   function applied(edit: Command): void {
