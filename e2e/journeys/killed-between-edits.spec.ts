@@ -4,7 +4,7 @@ import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
 import { serverDirectory } from '../../database/build.mjs';
 import { freePort } from '../../database/ports.mjs';
-import { DEMO_PASSWORD, DEMO_PEOPLE } from '../../database/seeders/demo-people';
+import { DEMO_PASSWORD, DEMO_PEOPLE } from '../fixtures/people';
 import { startTestProduct, type TestProduct } from '../fixtures/product';
 
 const KILLS = 20;
