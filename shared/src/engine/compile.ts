@@ -6,7 +6,6 @@ import {
   type FormulaNode,
   type FunctionName,
 } from '@shared/formula';
-import { fuse } from './fuse';
 import { Op, STRIDE } from './tape';
 
 const BINARY_OP: Readonly<Record<BinaryOperator, Op>> = {
@@ -99,7 +98,6 @@ export class TapeCompiler {
       const slot = code[i] as number;
       if (slot < 0) code[i] = firstTemporary - 1 - slot;
     }
-    fuse(code, firstTemporary);
     return { code, constants: [...this.constantSlots.keys()], temporaries: this.temporaries };
   }
 
@@ -157,7 +155,7 @@ export class TapeCompiler {
       const link = this.link(op, a, b);
       all = all ? this.result(Op.Multiply, this.inUse, all, link) : link;
     });
-    const slot = (all as Operand | undefined)?.slot ?? 0;
+    const slot = (all)?.slot ?? 0;
     this.inUse = mark;
     const kept = this.temporary();
     if (kept !== slot) this.emit(Op.Copy, kept, slot, slot);

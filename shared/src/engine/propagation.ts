@@ -92,7 +92,7 @@ export class Propagation {
       for (let marks = summary[s] as number; marks !== 0; marks = summary[s] as number) {
         const bit = marks & -marks;
         const word = (s << 5) + 31 - Math.clz32(bit);
-        for (let bits = words[word] as number; bits !== 0; bits = words[word] as number) {
+        for (let bits = words[word] as number; bits !== 0; bits = words[word]) {
           const lowest = bits & -bits;
           words[word] = bits ^ lowest;
           this.visit((word << 5) + 31 - Math.clz32(lowest));

@@ -70,7 +70,7 @@ export class TapeModel implements Model {
     const { readStarts, reads, kinds, ids } = this.program;
     const upstream = this.reach([this.rank(id)], (rank) => {
       const head = this.headOf(rank);
-      return reads.subarray(readStarts[head] as number, readStarts[head + 1] as number);
+      return reads.subarray(readStarts[head], readStarts[head + 1]);
     });
     const inputs = upstream.filter((rank) => kinds[rank] === Kind.Input).map((rank) => ids[rank] as string);
     return inputs.filter((input) => input !== id).sort();

@@ -48,27 +48,6 @@ export const enum Op {
   Ceil,
   Round,
   Sign,
-  // Two instructions in one step; the second stands behind the first and gives its destination and other operand c.
-  /** a * b * c */
-  MultiplyMultiply,
-  /** a * b + c */
-  MultiplyAdd,
-  /** a * b - c */
-  MultiplySubtract,
-  /** c - a * b */
-  SubtractProduct,
-  /** a * b / c */
-  MultiplyDivide,
-  /** c / (a * b) */
-  DivideByProduct,
-  /** (a + b) * c */
-  AddMultiply,
-  /** a + b + c */
-  AddAdd,
-  /** c / (a + b) */
-  DivideBySum,
-  /** (a - b) * c */
-  SubtractMultiply,
 }
 
 /** Numbers per instruction. */
@@ -96,68 +75,6 @@ export function run(code: Int32Array, values: Float64Array, from: number, to: nu
       case Op.Divide:
         values[target] = b - b === 0 ? a / b : NaN;
         break;
-      case Op.MultiplyMultiply: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = a * b * c;
-        pc += STRIDE;
-        break;
-      }
-      case Op.MultiplyAdd: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = a * b + c;
-        pc += STRIDE;
-        break;
-      }
-      case Op.MultiplySubtract: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = a * b - c;
-        pc += STRIDE;
-        break;
-      }
-      case Op.SubtractProduct: {
-        const c = values[code[pc + 6] as number] as number;
-        values[code[pc + 5] as number] = c - a * b;
-        pc += STRIDE;
-        break;
-      }
-      case Op.MultiplyDivide: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = c - c === 0 ? (a * b) / c : NaN;
-        pc += STRIDE;
-        break;
-      }
-      case Op.DivideByProduct: {
-        const c = values[code[pc + 6] as number] as number;
-        const product = a * b;
-        values[code[pc + 5] as number] = product - product === 0 ? c / product : NaN;
-        pc += STRIDE;
-        break;
-      }
-      case Op.AddMultiply: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = (a + b) * c;
-        pc += STRIDE;
-        break;
-      }
-      case Op.AddAdd: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = a + b + c;
-        pc += STRIDE;
-        break;
-      }
-      case Op.DivideBySum: {
-        const c = values[code[pc + 6] as number] as number;
-        const sum = a + b;
-        values[code[pc + 5] as number] = sum - sum === 0 ? c / sum : NaN;
-        pc += STRIDE;
-        break;
-      }
-      case Op.SubtractMultiply: {
-        const c = values[code[pc + 7] as number] as number;
-        values[code[pc + 5] as number] = (a - b) * c;
-        pc += STRIDE;
-        break;
-      }
       case Op.Copy:
         values[target] = a;
         break;
