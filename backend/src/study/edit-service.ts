@@ -276,7 +276,7 @@ function factsOf(proof: Proof, requirementId: string): RowFacts {
   const departed = proof.study
     .find('departure', 'requirementId', requirementId)
     .some((departure) => departure.state === 'in force');
-  return { compliance: proven.compliance, verdict: proven.verdict, digest: proven.digest, departed };
+  return { compliance: proven.computedCompliance, verdict: proven.verdict, digest: proven.digest, departed };
 }
 
 /** Approving what turns a verdict for the worse is allowed, and asks the chair for a reason. */
