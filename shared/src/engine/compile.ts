@@ -155,7 +155,7 @@ export class TapeCompiler {
       const link = this.link(op, a, b);
       all = all ? this.result(Op.Multiply, this.inUse, all, link) : link;
     });
-    const slot = (all)?.slot ?? 0;
+    const slot = all?.slot ?? 0;
     this.inUse = mark;
     const kept = this.temporary();
     if (kept !== slot) this.emit(Op.Copy, kept, slot, slot);
