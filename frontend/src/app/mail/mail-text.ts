@@ -23,6 +23,9 @@ interface Piece {
       white-space: pre-wrap;
       overflow-wrap: anywhere;
     }
+    a {
+      text-decoration: underline;
+    }
   `,
 })
 export class MailText {

@@ -8,9 +8,12 @@ export interface Announcement {
   readonly action?: { readonly label: string; readonly run: () => void };
 }
 
+const NEWS_STAYS = 9000;
+
 /** The quiet line above the title block: failures that belong to no field, and short news. */
 @Injectable({ providedIn: 'root' })
 export class ErrorLine {
+  private timer: ReturnType<typeof setTimeout> | undefined;
   private readonly current = signal<Announcement | null>(null);
   readonly announcement = this.current.asReadonly();
 
@@ -19,15 +22,19 @@ export class ErrorLine {
     const problem = toProblem(error);
     // The sign-in page says this already.
     if (problem.status === 401) return;
+    this.dismiss();
     this.current.set({ tone: 'error', text: sentence(problem), ...(action ? { action } : {}) });
   }
 
-  /** Says what happened, such as "Saved as r419". */
+  /** Says what happened, such as "Saved as r419"; goes by itself unless it offers something to do. */
   tell(text: string, action?: Announcement['action']): void {
+    this.dismiss();
     this.current.set({ tone: 'news', text, ...(action ? { action } : {}) });
+    if (action === undefined) this.timer = setTimeout(() => this.dismiss(), NEWS_STAYS);
   }
 
   dismiss(): void {
+    clearTimeout(this.timer);
     this.current.set(null);
   }
 }

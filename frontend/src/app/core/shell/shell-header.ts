@@ -16,7 +16,7 @@ import { SECTIONS, sectionOf } from './sections';
   imports: [Mark, PersonMenu, RouterLink],
   templateUrl: './shell-header.html',
   styleUrl: './shell-header.scss',
-  host: { '(keydown.escape)': 'open.set(false)' },
+  host: { role: 'banner', '(keydown.escape)': 'open.set(false)' },
 })
 export class ShellHeader {
   private readonly dialog = inject(MatDialog);

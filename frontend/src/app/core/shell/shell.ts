@@ -16,6 +16,8 @@ import { ErrorLine } from '../errors/error-line';
 import { JumpDialog } from '../keyboard/jump-dialog';
 import { KeysDialog } from '../keyboard/keys-dialog';
 import { Shortcuts } from '../keyboard/shortcuts';
+import { LiveUpdates } from '../live/live-updates';
+import { newsOf } from '../live/news';
 import { SessionStore } from '../session/session-store';
 import { StudyContext } from '../study/study-context';
 import { TitleBlock } from '../title-block';
@@ -85,6 +87,13 @@ export class Shell {
       .subscribe(([before, after]) => {
         if (before !== after) this.arrive();
       });
+
+    inject(LiveUpdates)
+      .events.pipe(
+        filter((event) => event.byId !== this.session.person()?.id),
+        takeUntilDestroyed(),
+      )
+      .subscribe((event) => this.line.tell(newsOf(event)));
 
     const title = inject(Title);
     effect(() => {

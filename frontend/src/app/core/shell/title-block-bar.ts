@@ -22,6 +22,7 @@ const SHOWN_NARROW = 2;
   imports: [MatMenu, MatMenuItem, MatMenuTrigger],
   templateUrl: './title-block-bar.html',
   styleUrl: './title-block-bar.scss',
+  host: { role: 'contentinfo' },
 })
 export class TitleBlockBar {
   private readonly dialog = inject(MatDialog);

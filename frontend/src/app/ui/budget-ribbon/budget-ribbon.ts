@@ -5,6 +5,9 @@ import type { ShowNumber } from '../measure/show-number';
 import { budgetSentence } from './budget-sentence';
 import { ribbonOf } from './ribbon';
 
+/** Share of the ribbon below which a segment would be narrower than 24 px on a phone. */
+const NARROWEST_TARGET = 0.08;
+
 /** How a parent's limit is shared out: the limit as a bar, children as segments, reserve hatched, overrun in red past the end. */
 @Component({
   selector: 'dp-budget-ribbon',
@@ -13,7 +16,7 @@ import { ribbonOf } from './ribbon';
     @if (ribbon(); as ribbon) {
       <div class="ribbon">
         @for (segment of segments(); track $index) {
-          @if (segment.share; as share) {
+          @if (segment.opens; as key) {
             <button
               type="button"
               [class]="segment.kind + ' shade-' + segment.shade"
@@ -21,13 +24,13 @@ import { ribbonOf } from './ribbon';
               [style.width.%]="segment.length * 100"
               [attr.title]="segment.spoken"
               [attr.aria-label]="segment.spoken"
-              (click)="open.emit(share.key)"
+              (click)="open.emit(key)"
             >
               {{ segment.label }}
             </button>
           } @else {
             <span
-              [class]="segment.kind"
+              [class]="segment.kind + ' shade-' + segment.shade"
               [style.left.%]="segment.start * 100"
               [style.width.%]="segment.length * 100"
               [attr.title]="segment.spoken"
@@ -73,6 +76,8 @@ export class BudgetRibbon {
       return {
         ...segment,
         shade: Math.min(3, index + 1),
+        // Too narrow to be hit; the child's own row is near by.
+        opens: segment.length < NARROWEST_TARGET ? null : (segment.share?.key ?? null),
         // Narrow pieces carry only the number, the narrowest nothing; the full words are on hover and read out.
         label:
           segment.length > 0.16 && segment.share !== null ? `${name} · ${bare}` : segment.length > 0.045 ? bare : '',
