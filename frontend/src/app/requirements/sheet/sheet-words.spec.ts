@@ -1,0 +1,77 @@
+import type { BindableView, RequirementSheet, StudyEvent } from '@shared/contract';
+import { newsOf } from './sheet-news';
+import { stateLine } from './state-line';
+import { outputsFor } from './verification-acts';
+
+const EVENT: StudyEvent = {
+  revision: 419,
+  by: 'Mika Sato',
+  byId: 'p2',
+  at: '2026-12-01T10:00:00Z',
+  summary: 'Specific impulse 6500 s → 6300 s',
+  moved: [
+    { key: 'VEH-001', from: 'compliant', to: 'short margin' },
+    { key: 'VEH-002', from: 'compliant', to: 'compliant' },
+  ],
+  touched: ['Q-001', 'VEH-009'],
+};
+
+describe('what others did to an open sheet', () => {
+  it('names who, which revision, what, and what became of the verdict', () => {
+    expect(newsOf(EVENT, 'VEH-001')).toBe(
+      'Mika Sato, r419: Specific impulse 6500 s → 6300 s. The verdict turned from compliant to short margin.',
+    );
+    expect(newsOf(EVENT, 'VEH-002')).toContain('the verdict stands');
+    expect(newsOf(EVENT, 'VEH-009')).toBe('Mika Sato, r419: Specific impulse 6500 s → 6300 s.');
+  });
+
+  it('says nothing about edits that do not reach it', () => {
+    expect(newsOf(EVENT, 'RAD-001')).toBeNull();
+  });
+});
+
+describe('stateLine', () => {
+  it('says where it stands, on which level, and whose it is', () => {
+    const sheet = {
+      state: 'baselined' as const,
+      baselinedIn: 'B2',
+      owner: { id: 'p1', name: 'Ines Okafor' },
+      coOwners: [],
+      level: 'vehicle',
+      element: null,
+    };
+    expect(stateLine(sheet)).toBe(
+      'baselined in B2 · changes go through the board · vehicle · allocated to no element · owned by Ines Okafor',
+    );
+    expect(stateLine({ ...sheet, state: 'in preparation', baselinedIn: null })).toContain('in preparation · vehicle');
+  });
+});
+
+describe('outputsFor', () => {
+  const output = (name: string, dimension: string): BindableView['outputs'][number] => ({
+    analysisId: 'a1',
+    key: 'AN-001',
+    output: name,
+    name,
+    unit: '',
+    dimension,
+    si: 1,
+  });
+  const sheet = {
+    limit: {
+      relation: 'at least',
+      value: { text: '38', unit: 'km/s', si: 38_000 },
+      upper: null,
+      tolerance: null,
+      temperature: 'absolute',
+      condition: '',
+    },
+    verifications: [{ analysisId: 'a1', output: 'taken' }] as unknown as RequirementSheet['verifications'],
+  } as const;
+
+  it('offers what has the dimension of the limit and is not linked yet', () => {
+    const outputs = [output('dv', 'speed'), output('taken', 'speed'), output('m', 'mass')];
+    expect(outputsFor(sheet, outputs).map((one) => one.output)).toEqual(['dv']);
+    expect(outputsFor({ ...sheet, limit: null }, outputs)).toEqual([]);
+  });
+});
