@@ -6,22 +6,27 @@ const SHRINK = 1 / 64;
 const ATTEMPTS = 4;
 
 /**
- * Slope of f at x by central differences over two steps, extrapolated (Richardson) to fourth order. Near the edge of
- * the domain the step shrinks; null when f has no value at x or beside it. f gives NaN for "no value".
+ * Slopes of several functions of one variable at x, by central differences over two steps, extrapolated (Richardson) to
+ * fourth order. Near the edge of a function's domain its step shrinks; null where it has no value at x or beside it.
+ * `f` gives all values at once, NaN for "no value"; each slope is the same whatever other functions are asked with it.
  */
-export function centralDifference(f: (x: number) => number, x: number): number | null {
-  if (!Number.isFinite(f(x))) return null;
+export function centralDifferences(f: (x: number) => Float64Array, x: number): (number | null)[] {
+  const slopes = Array.from(f(x), (value): number | null | undefined => (Number.isFinite(value) ? undefined : null));
   let step = x === 0 ? STEP_AT_ZERO : Math.abs(x) * RELATIVE_STEP;
-  for (let attempt = 0; attempt < ATTEMPTS; attempt++, step *= SHRINK) {
-    const wide = difference(f, x, step);
-    const narrow = difference(f, x, step / 2);
-    if (Number.isFinite(wide) && Number.isFinite(narrow)) return (4 * narrow - wide) / 3;
+  for (let attempt = 0; attempt < ATTEMPTS && slopes.includes(undefined); attempt++, step *= SHRINK) {
+    const wide = differences(f, x, step);
+    const narrow = differences(f, x, step / 2);
+    slopes.forEach((slope, i) => {
+      const [w, n] = [wide[i] as number, narrow[i] as number];
+      if (slope === undefined && Number.isFinite(w) && Number.isFinite(n)) slopes[i] = (4 * n - w) / 3;
+    });
   }
-  return null;
+  return slopes.map((slope) => slope ?? null);
 }
 
-function difference(f: (x: number) => number, x: number, step: number): number {
+function differences(f: (x: number) => Float64Array, x: number, step: number): Float64Array {
   const [below, above] = [x - step, x + step];
+  const lower = f(below);
   // The distance as rounded, not as meant.
-  return (f(above) - f(below)) / (above - below);
+  return f(above).map((value, i) => (value - (lower[i] as number)) / (above - below));
 }

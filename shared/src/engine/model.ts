@@ -83,6 +83,8 @@ export interface Model {
   dependantsOf(id: string): readonly string[];
   /** Slope of an output over an input, SI per SI; null if it cannot be computed on both sides of the present value. */
   derivative(output: string, input: string): number | null;
+  /** The derivatives of several outputs by one input in one sweep; each is the same to the bit as `derivative` gives. */
+  slopes(outputs: readonly string[], input: string): readonly (number | null)[];
   /** The input value nearest to the present one at which the output reaches the target (SI); null when none is found. */
   turningPoint(output: string, input: string, target: number, options?: TurningPointOptions): number | null;
   /** Values in SI in the order of the ids; NaN stands for a failure. */

@@ -1,5 +1,5 @@
 import type { CheckTable } from './checks';
-import { centralDifference } from './derivative';
+import { centralDifferences } from './derivative';
 import type { Changes, Model, Outcome, TurningPointOptions } from './model';
 import { Kind, type Program, type Propagation } from './propagation';
 import { nearestRoot } from './turning-point';
@@ -94,9 +94,14 @@ export class TapeModel implements Model {
   }
 
   derivative(output: string, input: string): number | null {
+    return this.slopes([output], input)[0] ?? null;
+  }
+
+  slopes(outputs: readonly string[], input: string): readonly (number | null)[] {
     const at = this.presentValue(input);
-    if (at === null) return null;
-    return centralDifference((x) => this.probe(input, x, output), at);
+    if (at === null) return outputs.map(() => null);
+    const ranks = outputs.map((output) => this.rank(output));
+    return centralDifferences((x) => this.probeAll(input, x, ranks), at);
   }
 
   turningPoint(output: string, input: string, target: number, options: TurningPointOptions = {}): number | null {
@@ -138,6 +143,16 @@ export class TapeModel implements Model {
     let i = 0;
     for (const value of changes.values()) this.propagation.write(ranks[i++] as number, value);
     this.propagation.propagate();
+  }
+
+  /** Several outputs for another value of one input, NaN for those that cannot be computed. The model is as before afterwards. */
+  private probeAll(input: string, value: number, ranks: readonly number[]): Float64Array {
+    const mark = this.propagation.mark();
+    this.propagation.write(this.inputRank(input), value);
+    this.propagation.propagate();
+    const results = Float64Array.from(ranks, (rank) => this.propagation.values[rank] as number);
+    this.propagation.rollBack(mark);
+    return results;
   }
 
   /** The output for another value of one input; NaN when it cannot be computed. The model is as before afterwards. */
