@@ -25,16 +25,19 @@ export async function startServer({ port, env, log }) {
   const ended = new Promise((/** @type {(end: ServerEnd) => void} */ resolve) => {
     server.once('exit', (code, signal) => resolve({ code: code ?? 1, how: signal ?? `exit code ${code}` }));
   });
-  const up = await Promise.race([healthy(port, 60_000), ended]);
+  const up = await Promise.race([healthy(server, port, 60_000), ended]);
   if (up === false) throw new Refusal('The server did not answer its health check within 60 s.');
   if (up !== true) throw new Refusal(`The server did not start (${up.how}).`, up.code || 1);
   return { process: server, ended };
 }
 
-/** @param {number} port @param {number} patience milliseconds */
-async function healthy(port, patience) {
+/**
+ * Whether the server answers its health check in time; gives up at once when the server has ended.
+ * @param {import('node:child_process').ChildProcess} server @param {number} port @param {number} patience milliseconds
+ */
+async function healthy(server, port, patience) {
   const deadline = Date.now() + patience;
-  while (Date.now() < deadline) {
+  while (Date.now() < deadline && server.exitCode === null && server.signalCode === null) {
     try {
       const answer = await fetch(`http://127.0.0.1:${port}/api/health`, { signal: AbortSignal.timeout(2_000) });
       if (answer.ok) return true;
