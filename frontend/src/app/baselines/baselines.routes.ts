@@ -1,3 +1,7 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
+import { Baselines } from './baselines';
 
-export default [] satisfies Routes;
+export default [
+  { path: '', component: Baselines },
+  { path: 'new', loadComponent: () => import('./take-baseline').then((file) => file.TakeBaseline) },
+] satisfies Routes;

@@ -1,3 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
+import { Compliance } from './compliance';
 
-export default [] satisfies Routes;
+export default [{ path: '', component: Compliance }] satisfies Routes;

@@ -1,3 +1,4 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
+import { Records } from './records';
 
-export default [] satisfies Routes;
+export default [{ path: '', component: Records }] satisfies Routes;
