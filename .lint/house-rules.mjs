@@ -22,10 +22,9 @@ const parts = {
   'backend/src/mail': ['shared/src', 'backend/src/models', 'backend/src/platform'],
   'backend/src/live': ['shared/src', 'backend/src/models', 'backend/src/platform'],
   'backend/src/study': [
-    'shared/src',
-    'backend/src/models',
-    'backend/src/platform',
-    'backend/src/middleware/problems.ts',
+    ...['shared/src', 'backend/src/models', 'backend/src/platform'],
+    // The path of a change answers in typed errors, knows who asks, and remembers its answer in its own transaction.
+    ...['problems.ts', 'access.ts', 'idempotency.ts'].map((file) => `backend/src/middleware/${file}`),
   ],
   'backend/src/exports': ['shared/src', 'backend/src/study', 'backend/src/platform'],
   'backend/src/middleware/problems.ts': ['shared/src'],
