@@ -92,7 +92,7 @@ import { FIELD_NAMES, conflictFields, withTheirs } from './requirement-conflict'
   `,
 })
 export class EditRequirement {
-  readonly key = input.required<string>();
+  readonly key = input('');
 
   private readonly api = inject(RequirementApi);
   private readonly edits = inject(Edits);
@@ -105,8 +105,9 @@ export class EditRequirement {
 
   protected readonly sheet = load(
     () => {
-      const key = this.context.readKey();
-      return key && { ...key, key: this.key() };
+      const read = this.context.readKey();
+      // The key comes with the first check of the router's inputs.
+      return read === undefined || this.key() === '' ? undefined : { ...read, key: this.key() };
     },
     ({ key }) => this.api.sheet(key),
   );

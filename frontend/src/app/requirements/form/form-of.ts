@@ -4,5 +4,5 @@ import { type RequirementText } from './requirement-text';
 
 /** A form over the texts of a requirement. */
 export function formOf(builder: NonNullableFormBuilder, text: RequirementText): RequirementForm {
-  return builder.group({ ...text }) as unknown as RequirementForm;
+  return builder.group({ ...text });
 }

@@ -204,5 +204,5 @@ export function changesBetween(
   const names = (Object.keys(next) as (keyof typeof next)[]).filter(
     (name) => JSON.stringify(old[name]) !== JSON.stringify(next[name]),
   );
-  return Object.fromEntries(names.map((name) => [name, next[name]])) as CommandOf<'requirement.revise'>['changes'];
+  return Object.fromEntries(names.map((name) => [name, next[name]]));
 }

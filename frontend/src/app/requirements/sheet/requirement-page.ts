@@ -49,7 +49,7 @@ import { VerificationsPart } from './verifications-part';
 })
 export class RequirementPage {
   /** From the address. */
-  readonly key = input.required<string>();
+  readonly key = input('');
 
   private readonly api = inject(RequirementApi);
   private readonly router = inject(Router);
@@ -64,7 +64,8 @@ export class RequirementPage {
   protected readonly state = load(
     () => {
       const read = this.context.readKey();
-      return read && { ...read, key: this.key() };
+      // The key comes with the first check of the router's inputs.
+      return read === undefined || this.key() === '' ? undefined : { ...read, key: this.key() };
     },
     ({ key }) => this.api.sheet(key),
     { discard: (previous, next) => previous.study !== next.study || previous.key !== next.key },
@@ -82,7 +83,7 @@ export class RequirementPage {
   });
   protected readonly underGauge = computed(() => {
     const sheet = this.state.value();
-    if (sheet?.limit == null) return 'No limit is stated.';
+    if (!sheet?.limit) return 'No limit is stated.';
     const expanded =
       sheet.expanded === null
         ? ''
@@ -99,14 +100,14 @@ export class RequirementPage {
   });
   protected readonly openItem = computed(() => {
     const item = this.state.value()?.openItem;
-    if (item == null) return null;
+    if (!item) return null;
     const person = this.context.head.value()?.members.find((member) => member.id === item.personId)?.name;
     const words = item.kind === 'TBD' ? 'To be determined' : 'To be reviewed';
     return `${words}${item.estimate ? `, estimated ${item.estimate}` : ''}: ${item.action} (${person ?? 'somebody who left'}, by ${item.due}). ${item.rationale}`;
   });
   protected readonly turnedBy = computed(() => {
     const turned = this.state.value()?.turnedBy;
-    if (turned == null) return null;
+    if (!turned) return null;
     return `It was ${turned.baselineVerdict} in the baseline, and was turned by r${turned.revision}${turned.direct ? ', a direct edit' : ''}.`;
   });
 
