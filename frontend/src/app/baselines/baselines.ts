@@ -1,7 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
 import type { BaselineRow } from '@shared/contract';
-import { mayGive } from '@shared/contract/permissions';
 import { ErrorLine } from '../core/errors/error-line';
 import { load } from '../core/http/load';
 import { StudyContext } from '../core/study/study-context';
@@ -49,7 +48,7 @@ export class Baselines {
   constructor() {
     inject(TitleBlock).register({
       actions: () =>
-        mayGive('baseline.take', this.context.roles()) && this.context.standpoint().kind === 'now'
+        this.context.holds('board-chair') && this.context.standpoint().kind === 'now'
           ? [
               {
                 label: 'Take a baseline',

@@ -2,7 +2,6 @@ import { ChangeDetectionStrategy, Component, DestroyRef, computed, inject, signa
 import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
-import { mayGive } from '@shared/contract/permissions';
 import { firstValueFrom } from 'rxjs';
 import { Drafts } from '../core/drafts/drafts';
 import { ErrorLine } from '../core/errors/error-line';
@@ -37,7 +36,7 @@ export class TakeBaseline {
     name: '',
     review: '',
     note: '',
-    openItems: 'listed' as 'listed' | 'refused',
+    openItems: 'listed',
   });
   private readonly typed = toSignal(this.form.valueChanges, { initialValue: this.form.value });
   private readonly asked = signal(false);
@@ -79,7 +78,7 @@ export class TakeBaseline {
       .map(({ key }) => key),
   );
 
-  protected readonly mayTake = computed(() => mayGive('baseline.take', this.context.roles()));
+  protected readonly mayTake = computed(() => this.context.holds('board-chair'));
   protected readonly messages = computed(() => {
     const empty = (field: 'name' | 'review'): boolean => this.asked() && (this.typed()[field] ?? '').trim() === '';
     const refused = (field: string): string => this.problem()?.fieldMessage(field) ?? '';

@@ -2,7 +2,6 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import { MatDialog } from '@angular/material/dialog';
 import { Router } from '@angular/router';
 import type { ChangeRow } from '@shared/contract';
-import { mayGive } from '@shared/contract/permissions';
 import { load } from '../core/http/load';
 import { StudyContext } from '../core/study/study-context';
 import { TitleBlock } from '../core/title-block';
@@ -83,7 +82,8 @@ export class Changes {
     inject(TitleBlock).register({
       name: () => undefined,
       actions: () =>
-        mayGive('change.write', this.context.roles()) && this.context.standpoint().kind === 'now'
+        this.context.holds('requirements-owner', 'analyst', 'board-member', 'board-chair') &&
+        this.context.standpoint().kind === 'now'
           ? [{ label: 'Write a change request', main: true, shortcut: 'n', run: () => this.write() }]
           : [],
     });

@@ -19,7 +19,7 @@ const SHORT = 26;
           >
           <ins class="mono"><span class="only-heard">to </span>{{ row.edit.after }}</ins>
           @if (mayDrop()) {
-            <button type="button" class="quiet" (click)="drop.emit(row.edit)">
+            <button type="button" class="quiet" (click)="dropEdit.emit(row.edit)">
               Drop<span class="only-heard"> {{ row.edit.what }}</span>
             </button>
           }
@@ -94,7 +94,7 @@ const SHORT = 26;
 export class ProposedEdits {
   readonly edits = input.required<readonly EditSummary[]>();
   readonly mayDrop = input(false);
-  readonly drop = output<EditSummary>();
+  readonly dropEdit = output<EditSummary>();
   protected readonly rows = computed(() =>
     this.edits().map((edit) => ({ edit, isLong: edit.before.length > SHORT || edit.after.length > SHORT })),
   );

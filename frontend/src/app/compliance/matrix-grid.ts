@@ -69,7 +69,7 @@ export class MatrixGrid {
   protected sorted({ columns, source }: SortChangedEvent<MatrixRow>): void {
     // Setting the columns from the address sorts too; only what the person did goes back into it.
     if (source !== 'uiColumnSorted') return;
-    const column = columns?.find((candidate) => candidate.getSort() != null);
+    const column = columns?.find((candidate) => Boolean(candidate.getSort()));
     this.sortChange.emit(column ? `${column.getSort() === 'desc' ? '-' : ''}${column.getColId()}` : '');
   }
 }

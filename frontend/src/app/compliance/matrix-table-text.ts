@@ -41,7 +41,7 @@ function cells(row: MatrixRow): string[] {
     inUnit(row.expanded, true),
     unit,
     inUnit(row.margin?.absolute, true),
-    row.margin?.percent == null ? '' : plainNumber(row.margin.percent, 12),
+    percentText(row),
     row.verdict,
     row.compliance,
     row.basis ?? '',
@@ -50,6 +50,10 @@ function cells(row: MatrixRow): string[] {
     text(row.element),
     text(row.owner),
   ];
+}
+
+function percentText({ margin }: MatrixRow): string {
+  return margin === null || margin.percent === null ? '' : plainNumber(margin.percent, 12);
 }
 
 /** A text must not end its cell, and must not be taken for a formula. */

@@ -76,7 +76,7 @@ export class LimitForm {
   protected readonly relations = RELATIONS;
   protected readonly form = inject(NonNullableFormBuilder).group({
     id: '',
-    relation: 'at least' as Limit['relation'],
+    relation: 'at least',
     value: '',
     upper: '',
     tolerance: '',
