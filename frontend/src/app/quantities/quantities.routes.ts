@@ -1,3 +1,7 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 
-export default [] satisfies Routes;
+export default [
+  { path: '', loadComponent: () => import('./quantities').then((file) => file.Quantities) },
+  { path: 'new', loadComponent: () => import('./sheet/quantity-page').then((file) => file.QuantityPage) },
+  { path: ':key', loadComponent: () => import('./sheet/quantity-page').then((file) => file.QuantityPage) },
+] satisfies Routes;
