@@ -34,7 +34,8 @@ export function load<K, T>(
   read: (key: K) => Observable<T>,
   options: LoadOptions<K> = {},
 ): ViewState<T> {
-  const state = signal<Snapshot<T>>({ value: undefined, loading: key() !== undefined, error: undefined });
+  // The key is not asked for yet: required inputs that it may read are set only after construction.
+  const state = signal<Snapshot<T>>({ value: undefined, loading: true, error: undefined });
   const again = signal(0);
   const asked = computed(() => ({ key: key(), again: again() }), {
     equal: (a, b) => JSON.stringify(a) === JSON.stringify(b),
