@@ -11,10 +11,12 @@ import { StudyContext } from '../core/study/study-context';
 import { TitleBlock } from '../core/title-block';
 import { Control, Field } from '../ui/field/field';
 import { Waiting } from '../ui/waiting/waiting';
-import { BaselinesApi } from './baselines-api';
+import { BaselinesApi, type NewBaseline } from './baselines-api';
 import { type Candidate, PickList } from './pick-list';
 
 const NEEDED = { name: 'A baseline needs a name.', review: 'Name the review at which it is taken.' } as const;
+
+type BaselineWords = Pick<NewBaseline, 'name' | 'review' | 'note' | 'openItems'>;
 
 /** Takes a baseline: what becomes baselined, what becomes controlled, under which name and at which review. */
 @Component({
@@ -32,7 +34,7 @@ export class TakeBaseline {
   protected readonly context = inject(StudyContext);
   private readonly slot = `baseline.${this.context.study() ?? ''}`;
 
-  protected readonly form = inject(NonNullableFormBuilder).group({
+  protected readonly form = inject(NonNullableFormBuilder).group<BaselineWords>({
     name: '',
     review: '',
     note: '',

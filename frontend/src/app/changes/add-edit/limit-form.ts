@@ -10,6 +10,14 @@ import { QuantityField, typedMeasure } from '../../ui/measure/quantity-field';
 
 const RELATIONS: readonly Limit['relation'][] = ['at least', 'at most', 'between', 'equal within'];
 
+interface LimitTyped {
+  readonly id: string;
+  readonly relation: Limit['relation'];
+  readonly value: string;
+  readonly upper: string;
+  readonly tolerance: string;
+}
+
 /** Proposes another limit of a requirement. */
 @Component({
   selector: 'dp-limit-form',
@@ -74,7 +82,7 @@ export class LimitForm {
   readonly propose = output<Command>();
 
   protected readonly relations = RELATIONS;
-  protected readonly form = inject(NonNullableFormBuilder).group({
+  protected readonly form = inject(NonNullableFormBuilder).group<LimitTyped>({
     id: '',
     relation: 'at least',
     value: '',
