@@ -161,6 +161,11 @@ describe('the matrix as a document', () => {
 describe('a baseline', () => {
   it('is exported again with the same content after the study has moved on', async () => {
     const ids = view.rows.filter((row) => row.key.startsWith('VEH')).map((row) => row.id);
+    await edit(
+      study,
+      study.owner,
+      ids.map((id) => ({ type: 'requirement.submit', id, version: 1 })),
+    );
     await edit(study, study.chair, [{ type: 'baseline.take', name: 'Frozen', review: 'MDR', requirementIds: ids }]);
     const before = (await file('csv', 'baseline:B1')).toString('utf8');
     const impulse = (

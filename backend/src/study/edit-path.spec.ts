@@ -23,6 +23,7 @@ const read = (path: string, at = 'now') => study.owner.agent.get(`/api/studies/$
 const setImpulse = (text: string, version: number, unit = 's') => [
   { type: 'quantity.set', id: small.impulse, version, value: { text, unit } },
 ];
+const submit = () => edit(study, study.owner, [{ type: 'requirement.submit', id: small.requirement, version: 1 }]);
 const expectHolds = async (): Promise<void> => {
   const report = await reproveStudy(testApp.services.sequelize, study.study.id);
   expect(report).toMatchObject({ verdicts: [], outputs: [], chain: { broken: null } });
@@ -120,8 +121,9 @@ describe('undo', () => {
 });
 
 describe('a change request', () => {
-  const baseline = () =>
-    edit(study, study.chair, [
+  const baseline = async () => {
+    await submit();
+    return edit(study, study.chair, [
       {
         type: 'baseline.take',
         name: 'Mission definition',
@@ -130,6 +132,7 @@ describe('a change request', () => {
         quantityIds: [small.impulse],
       },
     ]);
+  };
 
   it('is the only way to what is controlled; its impact is what then stands', async () => {
     await baseline();
@@ -192,6 +195,7 @@ describe('a change request', () => {
 
 describe('a baseline', () => {
   it('keeps its verdicts, values and digest whatever comes after', async () => {
+    await submit();
     await edit(study, study.chair, [
       { type: 'baseline.take', name: 'Mission definition', review: 'MDR', requirementIds: [small.requirement] },
     ]);
@@ -202,7 +206,7 @@ describe('a baseline', () => {
     expect(after.body.header.digest).toMatch(/^[0-9a-f]{64}$/);
     expect((await read('/requirements')).body.rows[0].verdict).toBe('non-compliant');
     expect((await read('/requirements/VEH-001')).body.turnedBy).toMatchObject({
-      revision: 4,
+      revision: 5,
       direct: true,
       baselineVerdict: 'compliant',
     });

@@ -2,9 +2,9 @@ import fc from 'fast-check';
 import type { Command } from '@shared/contract';
 import { proveAll, proveFork, reprove, outputNodes, type Proof } from './prove';
 import type { Study } from './study';
+import { takeBaseline } from './testing/baselines';
 import {
   ANALYST,
-  CHAIR,
   ID,
   MEMBER,
   OWNER,
@@ -343,15 +343,7 @@ describe('close-out', () => {
       version: 1,
       changes: { limit: limit('at most', '130', 't') },
     });
-    edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'System requirements',
-      review: 'SRR',
-      note: '',
-      requirementIds: [ID.mass],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(study, [ID.mass]);
     const version = study.get('requirement', ID.mass)!.version;
     edit(study, MEMBER, { type: 'assessment.close', id: ID.mass, version, reason: 'report seen' });
     expect(proveAll(study).proven.get(ID.mass)!.closeOut).toBe('closed');

@@ -1,5 +1,5 @@
 import type { RecordsView, RequirementSheet, Role, Verdict } from '@shared/contract';
-import { verdictCounts, recordChanges, type ViewContext } from '@shared/study';
+import { isUndoable, recordChanges, verdictCounts, type ViewContext } from '@shared/study';
 import { QueryTypes, type Sequelize } from 'sequelize';
 import type { StudyAccess } from '../../middleware/access';
 import type { Services } from '../../services';
@@ -145,7 +145,7 @@ export async function recordsView(
       moved: entry.moved.map((move) => ({ ...move, percent: null })),
       digest: entry.digest,
       previous: entry.previous,
-      undoable: entry.personId === context.me.id && context.standpoint.text === 'now',
+      undoable: context.standpoint.text === 'now' && isUndoable(context, entry.revision, entry.patch, entry.personId),
     })),
     next: last && last.revision > 1 ? last.revision : null,
     chain: { head: context.ledgerHead, entries: context.revision },

@@ -1,6 +1,7 @@
 import type { Command } from '@shared/contract';
 import { proveAll } from '../prove';
 import type { Study } from '../study';
+import { sendToReview, takeBaseline } from '../testing/baselines';
 import { refused } from '../testing/refused';
 import { reviewedStudy, seen } from '../testing/reviewed-study';
 import {
@@ -27,7 +28,7 @@ function compliantRow(): Study {
   const study = smallStudy();
   edit(study, OWNER, requirement({ id: idOf(80), title: 'lift', limit: limit('at most', '130', 't') }));
   edit(study, ANALYST, verifiedBy(idOf(81), idOf(80), ID.rollUp, 'm_0'));
-  edit(study, CHAIR, take([idOf(80)]));
+  takeBaseline(study, [idOf(80)]);
   return study;
 }
 function take(requirementIds: string[], more: object = {}): Command {
@@ -121,7 +122,7 @@ describe('closing a row', () => {
       requirement({ id: idOf(82), title: 'lift its part', limit: limit('at most', '125', 't'), parentIds: [idOf(80)] }),
     );
     edit(study, ANALYST, verifiedBy(idOf(83), idOf(82), ID.rollUp, 'm_0'));
-    edit(study, CHAIR, { ...take([idOf(82)]), id: idOf(96) } as Command);
+    takeBaseline(study, [idOf(82)]);
     expect(refused(study, CHAIR, row(study, 'assessment.close', idOf(80))).message).toContain(
       'VEH-004, which is still open',
     );
@@ -193,6 +194,7 @@ describe('taking a baseline', () => {
     };
     edit(study, OWNER, { type: 'requirement.revise', id: ID.mass, version: 1, changes: { openItem } } as Command);
     edit(study, OWNER, { type: 'requirement.withdraw', ...seen(study, 'requirement', ID.outbound), reason: 'no' });
+    sendToReview(study, ID.mass);
     const open = refused(study, CHAIR, take([ID.mass], { openItems: 'refused' }));
     expect(open.details).toMatchObject({ field: 'requirementIds', value: 'VEH-002' });
     expect(refused(study, CHAIR, take([ID.outbound])).code).toBe('state');
@@ -200,6 +202,16 @@ describe('taking a baseline', () => {
     expect(refused(study, CHAIR, take([], { quantityIds: [idOf(777)] })).details.field).toBe('quantityIds');
     expect(refused(study, MEMBER, take([ID.mass])).code).toBe('forbidden');
     expect(refused(study, READER, take([ID.mass])).code).toBe('forbidden');
+    takeBaseline(study, [ID.mass]);
+  });
+
+  it('refuses what nobody has reviewed', () => {
+    const study = smallStudy();
+    const unreviewed = refused(study, CHAIR, take([ID.mass]));
+    expect(unreviewed).toMatchObject({ code: 'state', details: { field: 'requirementIds', value: 'VEH-002' } });
+    expect(unreviewed.message).toContain('in preparation');
+    sendToReview(study, ID.mass);
     edit(study, CHAIR, take([ID.mass]));
+    expect(study.get('requirement', ID.mass)!.state).toBe('baselined');
   });
 });

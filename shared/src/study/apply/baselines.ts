@@ -15,6 +15,12 @@ export const takeBaseline: Apply<'baseline.take'> = (study, command, context) =>
         value: requirement.key,
         expected: 'requirements in force',
       });
+    if (requirement.state === 'in preparation')
+      throw new Refusal(
+        'state',
+        `${requirement.key} is in preparation; submit it for review first, or leave it out of the baseline.`,
+        { field: 'requirementIds', value: requirement.key, expected: 'a requirement in review' },
+      );
     if (requirement.openItem && command.openItems === 'refused') {
       throw invalid(
         'requirementIds',

@@ -102,6 +102,8 @@ function workingLife(): { accepted: Set<CommandType>; study: Study } {
   give(OWNER, { type: 'requirement.submit', ...at.requirement(idOf(80)) });
   give(OWNER, { type: 'requirement.return', ...at.requirement(idOf(80)), reason: 'not yet' });
   give(OWNER, { type: 'requirement.withdraw', ...at.requirement(ID.outbound), reason: 'not needed' });
+  give(OWNER, { type: 'requirement.submit', ...at.requirement(idOf(80)) });
+  give(OWNER, { type: 'requirement.submit', ...at.requirement(ID.mass) });
   give(CHAIR, {
     type: 'baseline.take',
     id: idOf(90),

@@ -4,6 +4,7 @@ import type { Refusal } from '../refusal';
 import type { Study } from '../study';
 import { refused } from '../testing/refused';
 import { reviewedStudy, seen } from '../testing/reviewed-study';
+import { takeBaseline } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -107,15 +108,7 @@ describe('taking back is refused', () => {
     const study = smallStudy();
     const patch = edit(study, OWNER, { type: 'change.write', title: 'T', reason: '', due: null, edits: [] });
     expect(undoRefused(study, OWNER, patch).message).toContain('step of procedure');
-    const taken = edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'N',
-      review: 'R',
-      note: '',
-      requirementIds: [ID.mass],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    const taken = takeBaseline(study, [ID.mass]);
     expect(undoRefused(study, CHAIR, taken).code).toBe('state');
   });
 
@@ -123,15 +116,7 @@ describe('taking back is refused', () => {
     const study = reviewedStudy();
     const linked = verifiedBy(idOf(80), ID.outbound, ID.transfer, 'v_e');
     const patch = edit(study, ANALYST, linked);
-    edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'N',
-      review: 'R',
-      note: '',
-      requirementIds: [ID.outbound],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(study, [ID.outbound]);
     expect(undoRefused(study, ANALYST, patch).code).toBe('controlled');
   });
 

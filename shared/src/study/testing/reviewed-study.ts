@@ -1,6 +1,7 @@
 import type { Command } from '@shared/contract';
 import type { Study } from '../study';
-import { CHAIR, ID, MEMBER, OWNER, edit, idOf, smallStudy, type Somebody } from './small-study';
+import { takeBaseline } from './baselines';
+import { CHAIR, ID, MEMBER, edit, idOf, smallStudy, type Somebody } from './small-study';
 
 /** Identifier of the baseline of the reviewed study, and of the change request that `changeBeforeBoard` writes. */
 export const BASELINE = idOf(900);
@@ -9,18 +10,7 @@ export const CHANGE = idOf(910);
 /** The small study after its review: VEH-001 and VEH-002 baselined, the specific impulse controlled, PRP-001 not. */
 export function reviewedStudy(): Study {
   const study = smallStudy();
-  for (const id of [ID.deltaV, ID.mass])
-    edit(study, OWNER, { type: 'requirement.submit', id, version: study.get('requirement', id)!.version });
-  edit(study, CHAIR, {
-    type: 'baseline.take',
-    id: BASELINE,
-    name: 'Concept',
-    review: 'Concept review',
-    note: '',
-    requirementIds: [ID.deltaV, ID.mass],
-    quantityIds: [ID.isp],
-    openItems: 'listed',
-  });
+  takeBaseline(study, [ID.deltaV, ID.mass], { id: BASELINE, quantityIds: [ID.isp] });
   return study;
 }
 

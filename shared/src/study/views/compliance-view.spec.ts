@@ -1,4 +1,5 @@
 import type { Study } from '../study';
+import { takeBaseline } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -74,15 +75,7 @@ describe('the compliance matrix', () => {
   it('carries signatures, departures, lowering and close-out', () => {
     const study = smallStudy();
     edit(study, MEMBER, { type: 'analysis.check', id: ID.rollUp, version: 1, remark: '' });
-    edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'System requirements',
-      review: 'SRR',
-      note: '',
-      requirementIds: [ID.mass],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(study, [ID.mass]);
     edit(study, ANALYST, {
       type: 'departure.request',
       id: idOf(95),

@@ -1,4 +1,5 @@
 import type { Study } from '../study';
+import { takeBaseline } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -218,15 +219,7 @@ describe('what waits for me', () => {
 
   it('is deciding on departures that others asked for', () => {
     const study = smallStudy();
-    edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'B',
-      review: 'SRR',
-      note: '',
-      requirementIds: [ID.mass],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(study, [ID.mass]);
     edit(study, ANALYST, {
       type: 'departure.request',
       kind: 'waiver',

@@ -1,5 +1,6 @@
 import type { Command, Patch } from '@shared/contract';
 import type { Study } from '../study';
+import { sendToReview } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -130,6 +131,7 @@ describe('the sentence of a ledger entry', () => {
     expect(said(study, MEMBER, { type: 'analysis.check', id: ID.rollUp, version: 1, remark: '' })).toBe(
       'Signed the check of AN-001',
     );
+    sendToReview(study, ID.deltaV);
     expect(
       said(study, CHAIR, {
         type: 'baseline.take',

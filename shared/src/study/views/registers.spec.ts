@@ -1,4 +1,5 @@
 import type { Verdict } from '@shared/contract';
+import { takeBaseline } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -20,23 +21,11 @@ import { productTreeView } from './product-tree-view';
 import { searchView } from './search-view';
 import { studyHead } from './study-head';
 
-const takeBaseline = (requirementIds: string[], quantityIds: string[]) =>
-  ({
-    type: 'baseline.take',
-    id: idOf(90),
-    name: 'Concept',
-    review: 'Concept review',
-    note: '',
-    requirementIds,
-    quantityIds,
-    openItems: 'listed',
-  }) as const;
-
 describe('the head of a study', () => {
   it('names the baseline in force, the people and what the person may look at', () => {
     const study = smallStudy();
     edit(study, OWNER, { type: 'change.write', title: 'Mine', reason: '', due: null, edits: [] });
-    edit(study, CHAIR, takeBaseline([ID.deltaV], []));
+    takeBaseline(study, [ID.deltaV]);
     const baseline = { key: 'B1', revision: 7, verdicts: new Map<string, Verdict>() };
     const members = PEOPLE.map((person) => ({ ...person, roles: [...person.roles] }));
     const head = studyHead(viewOf(study, OWNER, { baseline }), members);
@@ -111,8 +100,8 @@ describe('baselines', () => {
   it('are listed newest first, with what a new one would take in', () => {
     const study = smallStudy();
     edit(study, ANALYST, quantity(idOf(80), 'x', '1', 'm'));
-    edit(study, CHAIR, takeBaseline([ID.deltaV], [ID.isp]));
-    edit(study, CHAIR, { ...takeBaseline([ID.mass], []), id: idOf(91) });
+    takeBaseline(study, [ID.deltaV], { quantityIds: [ID.isp] });
+    takeBaseline(study, [ID.mass]);
     const counts = { compliant: 2 } as unknown as Record<Verdict, number>;
     const view = baselinesView(viewOf(study), new Map([['B1', counts]]));
     expect(view.rows.map(({ key, person }) => [key, person.name])).toEqual([

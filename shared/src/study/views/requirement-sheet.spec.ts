@@ -1,5 +1,6 @@
 import type { CommandType } from '@shared/contract';
 import type { Study } from '../study';
+import { takeBaseline } from '../testing/baselines';
 import {
   ANALYST,
   CHAIR,
@@ -25,15 +26,7 @@ function sheetOf(study: Study, key: string, person: Somebody = READER, over: Par
 }
 function baselined(...requirementIds: string[]): Study {
   const study = smallStudy();
-  edit(study, CHAIR, {
-    type: 'baseline.take',
-    name: 'System requirements',
-    review: 'SRR',
-    note: '',
-    requirementIds,
-    quantityIds: [],
-    openItems: 'listed',
-  });
+  takeBaseline(study, requirementIds);
   return study;
 }
 const versionOf = (study: Study, id: string): number => study.get('requirement', id)!.version;
@@ -204,15 +197,7 @@ describe('what a person may do on a requirement', () => {
       changes: { limit: limit('at most', '130', 't') },
     });
     expect(may(heavier, 'VEH-002', MEMBER)).not.toContain('assessment.close');
-    edit(heavier, CHAIR, {
-      type: 'baseline.take',
-      name: 'B',
-      review: 'SRR',
-      note: '',
-      requirementIds: [ID.mass],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(heavier, [ID.mass]);
     expect(may(heavier, 'VEH-002', MEMBER)).toContain('assessment.close');
     // The owner does not sign the close-out of an own requirement.
     const both: Somebody = { ...OWNER, roles: ['requirements-owner', 'board-member'] };

@@ -1,15 +1,5 @@
-import {
-  CHAIR,
-  edit,
-  emptyStudy,
-  ID,
-  idOf,
-  limit,
-  OWNER,
-  requirement,
-  smallStudy,
-  viewOf,
-} from '../testing/small-study';
+import { takeBaseline } from '../testing/baselines';
+import { edit, emptyStudy, ID, idOf, limit, OWNER, requirement, smallStudy, viewOf } from '../testing/small-study';
 import { requirementsView } from './requirements-view';
 
 const lines = (study: Parameters<typeof viewOf>[0]) =>
@@ -61,15 +51,7 @@ describe('the flow-down', () => {
         },
       },
     });
-    edit(study, CHAIR, {
-      type: 'baseline.take',
-      name: 'B',
-      review: 'SRR',
-      note: '',
-      requirementIds: [ID.deltaV],
-      quantityIds: [],
-      openItems: 'listed',
-    });
+    takeBaseline(study, [ID.deltaV]);
     const view = requirementsView(viewOf(study));
     expect(view.rows.map(({ key, hasChildren }) => [key, hasChildren])).toEqual([
       ['VEH-001', false],
