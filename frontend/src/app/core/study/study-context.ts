@@ -1,7 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { type ActivatedRouteSnapshot, ResolveEnd, Router, type UrlTree } from '@angular/router';
+import { type ActivatedRouteSnapshot, GuardsCheckEnd, Router, type UrlTree } from '@angular/router';
 import type { Role, Standpoint, StudyHead } from '@shared/contract';
 import { filter } from 'rxjs';
 import { load } from '../http/load';
@@ -64,10 +64,11 @@ export class StudyContext {
   readonly isEditable = computed(() => this.head.value()?.standpoint.editable ?? false);
 
   constructor() {
-    // ResolveEnd comes before the pages of the new address are created, so they find the right study at once.
+    // Comes before the pages of the new address are created, so they find the right study at once, and also where only
+    // the standpoint changes, when there is nothing to resolve.
     this.router.events
       .pipe(
-        filter((event) => event instanceof ResolveEnd),
+        filter((event): event is GuardsCheckEnd => event instanceof GuardsCheckEnd && event.shouldActivate),
         takeUntilDestroyed(),
       )
       .subscribe((event) => {

@@ -233,9 +233,13 @@ export class FlowDown {
     if (index < start || index >= end || at < top || at + this.lineHeight() > top + viewport.getViewportSize()) {
       viewport.scrollToOffset(Math.max(0, at - viewport.getViewportSize() / 2));
     }
-    const focus = (): void =>
-      this.host.querySelector<HTMLElement>(`[data-path="${CSS.escape(line.id)}"]`)?.focus({ preventScroll: true });
-    afterNextRender(() => requestAnimationFrame(focus), { injector: this.injector });
+    // A line that had to be scrolled to is drawn some frames later.
+    const focus = (frames: number): void => {
+      const row = this.host.querySelector<HTMLElement>(`[data-path="${CSS.escape(line.id)}"]`);
+      if (row !== null) row.focus({ preventScroll: true });
+      else if (frames > 0) requestAnimationFrame(() => focus(frames - 1));
+    };
+    afterNextRender(() => requestAnimationFrame(() => focus(20)), { injector: this.injector });
   }
 
   private toAddress(queryParams: Record<string, string | null>): void {

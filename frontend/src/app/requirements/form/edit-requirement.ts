@@ -2,6 +2,9 @@ import {
   ChangeDetectionStrategy,
   Component,
   DestroyRef,
+  ElementRef,
+  Injector,
+  afterNextRender,
   computed,
   effect,
   inject,
@@ -101,6 +104,8 @@ export class EditRequirement {
   private readonly router = inject(Router);
   private readonly proposals = inject(ProposeChange);
   private readonly destroyed = inject(DestroyRef);
+  private readonly injector = inject(Injector);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   protected readonly context = inject(StudyContext);
 
   protected readonly sheet = load(
@@ -233,10 +238,19 @@ export class EditRequirement {
     } catch (error) {
       const problem = toProblem(error);
       this.problem.set(problem);
-      if (problem.code === 'stale' && isRequirement(problem.current)) this.theirs.set(problem.current);
+      if (problem.code === 'stale' && isRequirement(problem.current)) this.ask(problem.current);
     } finally {
       this.busy.set(false);
     }
+  }
+
+  /** Shows both sides, and brings the choice into view: it stands above the fields. */
+  private ask(theirs: Requirement): void {
+    this.theirs.set(theirs);
+    const host = this.host.nativeElement;
+    afterNextRender(() => host.querySelector<HTMLElement>('dp-conflict-view input')?.focus(), {
+      injector: this.injector,
+    });
   }
 
   private fill(sheet: RequirementSheet): void {

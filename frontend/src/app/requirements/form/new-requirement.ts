@@ -181,11 +181,15 @@ export class NewRequirement {
   private begin(): void {
     const parent = this.all().find((row) => row.key === this.under);
     this.parentIds.set(parent === undefined ? [] : [parent.id]);
-    if (this.form.dirty) return;
+    // What was typed while this was being read stays.
+    const typed = this.form.getRawValue();
     const levels = this.context.head.value()?.study.levels ?? [];
     const level = parent === undefined ? levels[0] : (levels[levels.indexOf(parent.level) + 1] ?? parent.level);
     const element = this.elements().find((row) => row.key === parent?.element?.key);
-    this.form.patchValue({ level: level ?? '', elementId: element?.id ?? '' });
+    this.form.patchValue({
+      level: typed.level || (level ?? ''),
+      elementId: typed.elementId || (this.isRestored() ? '' : (element?.id ?? '')),
+    });
   }
 
   private async save(): Promise<void> {

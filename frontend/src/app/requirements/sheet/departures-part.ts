@@ -1,14 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import type { Departure, RequirementSheet } from '@shared/contract';
 import { SessionStore } from '../../core/session/session-store';
+import { dayText } from '../../ui/day/day';
 import { ProcedureActs } from './procedure-acts';
 
 /** Departures from a requirement, and how its row of the compliance matrix stands: lowered, closed, reopened. */
 @Component({
   selector: 'dp-departures-part',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [DatePipe],
   template: `
     <h2 class="caption">Compliance</h2>
     <dl class="facts">
@@ -18,18 +17,14 @@ import { ProcedureActs } from './procedure-acts';
         <dt>Lowered to</dt>
         <dd>
           {{ lowered.to }}
-          <div class="small faint">
-            {{ lowered.person.name }}, {{ lowered.at | date: 'd MMM y' }}: {{ lowered.reason }}
-          </div>
+          <div class="small faint">{{ lowered.person.name }}, {{ day(lowered.at) }}: {{ lowered.reason }}</div>
         </dd>
       }
       <dt>Close-out</dt>
       <dd>
         {{ sheet().closeOut }}
         @if (sheet().closed; as closed) {
-          <div class="small faint">
-            signed by {{ closed.person.name }}, {{ closed.at | date: 'd MMM y' }}: {{ closed.reason }}
-          </div>
+          <div class="small faint">signed by {{ closed.person.name }}, {{ day(closed.at) }}: {{ closed.reason }}</div>
         }
       </dd>
       @for (departure of sheet().departures; track departure.id) {
@@ -68,6 +63,7 @@ import { ProcedureActs } from './procedure-acts';
 export class DeparturesPart {
   readonly sheet = input.required<RequirementSheet>();
   protected readonly acts = inject(ProcedureActs);
+  protected readonly day = dayText;
   private readonly me = inject(SessionStore).person;
   private readonly allowed = computed(() => this.sheet().may);
 
@@ -80,7 +76,7 @@ export class DeparturesPart {
   }
 
   protected about(departure: Departure): string {
-    const until = departure.expires === null ? '' : `until ${departure.expires}`;
+    const until = departure.expires === null ? '' : `until ${dayText(departure.expires)}`;
     const decided = departure.decision === null ? '' : departure.decision.reason;
     return [`${departure.class} ${departure.kind}, ${departure.state}`, departure.effectivity, until, decided]
       .filter((part) => part !== '')

@@ -114,7 +114,7 @@ export class FlowLinks {
         mayPropose: isParent && link.share === 'none' && isLimited && this.may('budget.propose'),
         mayTakeBack: isParent && link.share === 'proposed' && this.may('budget.propose'),
         mayUnlink: isParent && this.may('trace.unlink'),
-        mayAdopt: isChild && link.share !== 'adopted' && this.sheet().budget !== null && this.mayAdopt(),
+        mayAdopt: isChild && link.share === 'proposed' && this.sheet().budget !== null && this.mayAdopt(),
       };
     });
   });

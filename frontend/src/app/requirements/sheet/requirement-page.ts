@@ -6,6 +6,7 @@ import { UnitPreferences } from '../../core/preferences/unit-preferences';
 import { StudyContext } from '../../core/study/study-context';
 import { type SheetAction, TitleBlock } from '../../core/title-block';
 import { BudgetRibbon } from '../../ui/budget-ribbon/budget-ribbon';
+import { dayText } from '../../ui/day/day';
 import { limitText } from '../../ui/limit/limit-text';
 import { gaugeReading } from '../../ui/margin/gauge-reading';
 import { MarginGauge } from '../../ui/margin/margin-gauge';
@@ -21,7 +22,6 @@ import { BudgetActs } from './budget-acts';
 import { DeparturesPart } from './departures-part';
 import { FlowLinks } from './flow-links';
 import { ProcedureActs } from './procedure-acts';
-import { SheetNews, newsOf } from './sheet-news';
 import { stateLine } from './state-line';
 import { VerificationActs } from './verification-acts';
 import { VerificationsPart } from './verifications-part';
@@ -43,7 +43,6 @@ import { VerificationsPart } from './verifications-part';
     VerificationsPart,
     Waiting,
   ],
-  providers: [SheetNews],
   templateUrl: './requirement-page.html',
   styleUrl: './requirement-page.scss',
 })
@@ -58,7 +57,6 @@ export class RequirementPage {
   private readonly verifications = inject(VerificationActs);
   private readonly proposals = inject(ProposeChange);
   protected readonly budgets = inject(BudgetActs);
-  protected readonly newsLine = inject(SheetNews);
   protected readonly context = inject(StudyContext);
 
   protected readonly state = load(
@@ -92,18 +90,20 @@ export class RequirementPage {
   });
   protected readonly required = computed(() => {
     const required = this.state.value()?.required;
-    return required ? `${percentText(required.percent)} required. ${required.definition} ${required.source}` : '';
+    if (!required) return '';
+    return `${percentText(required.percent).replace('+', '')} required: ${required.definition}. ${required.source}`;
   });
-  protected readonly latest = computed(() => {
-    const event = this.newsLine.event();
-    return event === null ? null : newsOf(event, this.key());
+  /** What the per cent is of, where it is not of the limit. */
+  protected readonly percentOf = computed(() => {
+    const of = this.state.value()?.margin?.percentOf ?? '';
+    return of === 'of the limit' ? '' : of;
   });
   protected readonly openItem = computed(() => {
     const item = this.state.value()?.openItem;
     if (!item) return null;
     const person = this.context.head.value()?.members.find((member) => member.id === item.personId)?.name;
     const words = item.kind === 'TBD' ? 'To be determined' : 'To be reviewed';
-    return `${words}${item.estimate ? `, estimated ${item.estimate}` : ''}: ${item.action} (${person ?? 'somebody who left'}, by ${item.due}). ${item.rationale}`;
+    return `${words}${item.estimate ? `, estimated ${item.estimate}` : ''}: ${item.action} (${person ?? 'somebody who left'}, by ${dayText(item.due)}). ${item.rationale}`;
   });
   protected readonly turnedBy = computed(() => {
     const turned = this.state.value()?.turnedBy;

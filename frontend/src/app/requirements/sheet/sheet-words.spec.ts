@@ -1,34 +1,6 @@
-import type { BindableView, RequirementSheet, StudyEvent } from '@shared/contract';
-import { newsOf } from './sheet-news';
+import type { BindableView, RequirementSheet } from '@shared/contract';
 import { stateLine } from './state-line';
 import { outputsFor } from './verification-acts';
-
-const EVENT: StudyEvent = {
-  revision: 419,
-  by: 'Mika Sato',
-  byId: 'p2',
-  at: '2026-12-01T10:00:00Z',
-  summary: 'Specific impulse 6500 s → 6300 s',
-  moved: [
-    { key: 'VEH-001', from: 'compliant', to: 'short margin' },
-    { key: 'VEH-002', from: 'compliant', to: 'compliant' },
-  ],
-  touched: ['Q-001', 'VEH-009'],
-};
-
-describe('what others did to an open sheet', () => {
-  it('names who, which revision, what, and what became of the verdict', () => {
-    expect(newsOf(EVENT, 'VEH-001')).toBe(
-      'Mika Sato, r419: Specific impulse 6500 s → 6300 s. The verdict turned from compliant to short margin.',
-    );
-    expect(newsOf(EVENT, 'VEH-002')).toContain('the verdict stands');
-    expect(newsOf(EVENT, 'VEH-009')).toBe('Mika Sato, r419: Specific impulse 6500 s → 6300 s.');
-  });
-
-  it('says nothing about edits that do not reach it', () => {
-    expect(newsOf(EVENT, 'RAD-001')).toBeNull();
-  });
-});
 
 describe('stateLine', () => {
   it('says where it stands, on which level, and whose it is', () => {
