@@ -1,3 +1,4 @@
+import './interpreted-schemas';
 export * from './roles';
 export * from './measure';
 export * from './entities';
