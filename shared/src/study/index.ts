@@ -8,6 +8,8 @@ export * from './analysis-ports';
 export * from './edit-context';
 export * from './change-requests';
 export * from './model';
+export * from './standard-uncertainties';
+export * from './required-margin';
 export * from './prove';
 export * from './wording';
 export * from './apply';

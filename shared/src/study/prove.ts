@@ -13,8 +13,10 @@ import type { Model, Outcome } from '@shared/engine';
 import { digestOf } from './digest';
 import { isTemperature, knownDimension, methodInputs, methodOf } from './analysis-ports';
 import { modelChange, modelOf, outputNode, sourceNode, uncertainInputs } from './model';
+import { requiredMargin } from './required-margin';
+import { standardsOf } from './standard-uncertainties';
 import type { Study } from './study';
-import { complianceOf, judge, lowers, marginView, percentBase, worseVerdict } from './verdict';
+import { complianceOf, judge, lowers, marginView, worseVerdict } from './verdict';
 
 /** What one verification says about its requirement. */
 export interface Judgement {
@@ -204,49 +206,6 @@ export function sameProven(a: Proven | null, b: Proven | null): boolean {
   return a === b || JSON.stringify(a) === JSON.stringify(b);
 }
 
-/** Above this many nodes it is quicker to go through all uncertain inputs than to look up what is upstream of each node. */
-const FEW_NODES = 64;
-
-/**
- * Standard uncertainties in SI of several nodes: first order over their independent uncertain inputs (JCGM 100:2008,
- * 5.1.2); null for a node that rests on no uncertain input. One sweep of the model an input, whatever the number of
- * nodes; a node's figure is the same to the bit whatever other nodes are asked with it.
- */
-export function standardsOf(
-  model: Model,
-  uncertain: ReadonlyMap<string, number>,
-  nodes: readonly string[],
-): Map<string, number | null> {
-  const variances = new Map<string, number | null>(nodes.map((node) => [node, null]));
-  const add = (node: string, slope: number, standard: number): void => {
-    variances.set(node, (variances.get(node) ?? 0) + (slope * standard) ** 2);
-  };
-  for (const input of relevantInputs(model, uncertain, nodes)) {
-    const standard = uncertain.get(input);
-    if (standard === undefined) continue;
-    // An external result is an input itself.
-    if (variances.has(input)) add(input, 1, standard);
-    const reached = model.dependantsOf(input).filter((node) => variances.has(node));
-    if (reached.length === 0) continue;
-    model.slopes(reached, input).forEach((slope, i) => {
-      if (slope !== null) add(reached[i] as string, slope, standard);
-    });
-  }
-  return new Map([...variances].map(([node, variance]) => [node, variance === null ? null : Math.sqrt(variance)]));
-}
-
-/** Uncertain inputs that may bear on the nodes, sorted, so that sums are always formed in the same order. */
-function relevantInputs(model: Model, uncertain: ReadonlyMap<string, number>, nodes: readonly string[]): string[] {
-  if (nodes.length > FEW_NODES) return [...uncertain.keys()].filter((input) => model.has(input)).sort();
-  const upstream = new Set(nodes.flatMap((node) => [node, ...model.inputsOf(node)]));
-  return [...upstream].filter((input) => uncertain.has(input)).sort();
-}
-
-/** Standard uncertainty of one node in SI; null when it rests on no uncertain input. */
-export function standardOf(model: Model, uncertain: ReadonlyMap<string, number>, node: string): number | null {
-  return standardsOf(model, uncertain, [node]).get(node) ?? null;
-}
-
 /** Standard uncertainties of everything that verifies the given requirements. */
 function standardsBehind(
   study: Study,
@@ -383,24 +342,6 @@ function judgeFinding(finding: Finding, method: string): Pick<Judgement, 'verdic
     reason: `found ${finding.met ? 'met' : 'not met'} by ${method}, ${finding.document}${finding.issue ? ` issue ${finding.issue}` : ''}`,
     basis: 'demonstrated',
   };
-}
-
-/** The margin that policy asks for, from the row for the requirement's parameter at the study's maturity; null where no row or no per cent applies. */
-export function requiredMargin(study: Study, requirement: Requirement, limit: Limit): RequiredMargin | null {
-  if (!requirement.parameter) return null;
-  const { maturity } = study.settings;
-  const row = study
-    .all('policy')
-    .find((policy) => policy.parameter === requirement.parameter && policy.maturity === maturity);
-  const base = row && percentBase(limit, isTemperature(knownDimension(limit.value.unit)));
-  return row && base
-    ? {
-        percent: row.percent,
-        absolute: (row.percent / 100) * base.base,
-        definition: row.definition,
-        source: row.source,
-      }
-    : null;
 }
 
 /** Warnings of the method behind an analysis at its present inputs. */

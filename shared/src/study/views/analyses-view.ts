@@ -3,18 +3,37 @@ import { describeDimension } from '@shared/units';
 import { methodOf, outputsOf, type Port } from '../analysis-ports';
 import { definitionDigest, isControlled } from '../apply/analyses';
 import { outputNode } from '../model';
-import { standardOf } from '../prove';
+import type { Proof } from '../prove';
+import { standardsOf } from '../standard-uncertainties';
 import { byKey, provenOf } from './verdict-view';
 import { personRef, type ViewContext } from './view-context';
 
 /** All analyses, by key, with what each verifies and what it gives now. */
 export function analysesView(context: ViewContext): AnalysesView {
   const analyses = context.proof.study.all('analysis').sort(byKey);
-  return { rows: analyses.map((analysis) => analysisRow(context, analysis)) };
+  const standards = outputStandards(context.proof, analyses);
+  return { rows: analyses.map((analysis) => analysisRow(context, analysis, standards)) };
 }
 
-/** One analysis as a line of the list. */
-export function analysisRow(context: ViewContext, analysis: Analysis): AnalysisRow {
+/** Standard uncertainties in SI of the outputs of analyses, by node: all of them in one sweep of the model an input. */
+export function outputStandards(
+  { study, model, uncertain }: Proof,
+  analyses: readonly Analysis[],
+): ReadonlyMap<string, number | null> {
+  const nodes = analyses.flatMap((analysis) =>
+    outputsOf(study, analysis)
+      .map(({ name }) => outputNode(analysis.id, name))
+      .filter((node) => model.has(node) && model.outcome(node).ok),
+  );
+  return standardsOf(model, uncertain, nodes);
+}
+
+/** One analysis as a line of the list; `standards` are the standard uncertainties of its outputs. */
+export function analysisRow(
+  context: ViewContext,
+  analysis: Analysis,
+  standards: ReadonlyMap<string, number | null>,
+): AnalysisRow {
   const { study } = context.proof;
   const { id, version, key, name, kind } = analysis;
   return {
@@ -29,7 +48,7 @@ export function analysisRow(context: ViewContext, analysis: Analysis): AnalysisR
     state: isChecked(analysis) ? 'checked' : 'draft',
     controlled: isControlled(study, analysis),
     verifies: verifies(context, analysis),
-    outputs: outputsOf(study, analysis).map((port) => outputView(context, analysis, port)),
+    outputs: outputsOf(study, analysis).map((port) => outputView(context, analysis, port, standards)),
   };
 }
 
@@ -54,7 +73,12 @@ export function shownAt(port: Pick<Port, 'unit' | 'temperature'>, si: number): S
 }
 
 /** An output with its value and standard uncertainty (SI, first order), or why it has none. */
-function outputView({ proof }: ViewContext, analysis: Analysis, port: Port): OutputView {
+function outputView(
+  { proof }: ViewContext,
+  analysis: Analysis,
+  port: Port,
+  standards: ReadonlyMap<string, number | null>,
+): OutputView {
   const { name, tex, label } = port;
   const plain = { name, tex, label, dimension: describeDimension(port.dimension) };
   const node = outputNode(analysis.id, name);
@@ -62,6 +86,5 @@ function outputView({ proof }: ViewContext, analysis: Analysis, port: Port): Out
     return { ...plain, shown: null, standard: null, failure: 'this build does not have the method version it pins' };
   const outcome = proof.model.outcome(node);
   if (!outcome.ok) return { ...plain, shown: null, standard: null, failure: outcome.failure.message };
-  const standard = standardOf(proof.model, proof.uncertain, node);
-  return { ...plain, shown: shownAt(port, outcome.value), standard, failure: '' };
+  return { ...plain, shown: shownAt(port, outcome.value), standard: standards.get(node) ?? null, failure: '' };
 }

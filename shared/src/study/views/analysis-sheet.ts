@@ -2,20 +2,13 @@ import type { Analysis, AnalysisSheet, Binding, Command, CommandType, InputView,
 import { nameTex } from '@shared/formula';
 import { newestVersion } from '@shared/methods';
 import { describeDimension } from '@shared/units';
-import {
-  isTemperature,
-  knownDimension,
-  methodInputs,
-  methodOf,
-  outputsOf,
-  sourcePort,
-  type Port,
-} from '../analysis-ports';
+import { isTemperature, knownDimension, methodInputs, methodOf, outputsOf, sourcePort } from '../analysis-ports';
 import { pendingChanges } from '../change-requests';
 import { outputNode, sourceNode } from '../model';
-import { methodWarnings, requiredMargin, standardOf } from '../prove';
+import { methodWarnings } from '../prove';
+import { requiredMargin } from '../required-margin';
 import { judge, marginView } from '../verdict';
-import { analysisRow, isChecked, shownAt } from './analyses-view';
+import { analysisRow, isChecked, outputStandards, shownAt } from './analyses-view';
 import { permitted } from './permitted';
 import { ownProofLines } from './proof-lines';
 import { byKey, provenOf, requirementsInForce } from './verdict-view';
@@ -32,8 +25,9 @@ export function analysisSheet(context: ViewContext, key: string): AnalysisSheet 
   const method = methodOf(analysis);
   const newest = analysis.method ? newestVersion(analysis.method.id) : undefined;
   const { check } = analysis;
+  const standards = outputStandards(context.proof, [analysis]);
   return {
-    ...analysisRow(context, analysis),
+    ...analysisRow(context, analysis, standards),
     purpose: analysis.purpose,
     elementId: analysis.elementId,
     assumptions: analysis.assumptions,
@@ -54,7 +48,7 @@ export function analysisSheet(context: ViewContext, key: string): AnalysisSheet 
       digest: check.digest,
       valid: isChecked(analysis),
     },
-    couldVerify: couldVerify(context, analysis),
+    couldVerify: couldVerify(context, analysis, standards),
     changePending: pendingChanges(study).get(analysis.id) ?? [],
     may: stepsOpenTo(context, analysis),
   };
@@ -108,7 +102,11 @@ function statedUncertainty(study: ViewContext['proof']['study'], { from }: Bindi
 }
 
 /** Requirements that an output could be linked to, with the verdict it would give alone; those without evidence first. */
-function couldVerify(context: ViewContext, analysis: Analysis): AnalysisSheet['couldVerify'] {
+function couldVerify(
+  context: ViewContext,
+  analysis: Analysis,
+  standards: ReadonlyMap<string, number | null>,
+): AnalysisSheet['couldVerify'] {
   const { study } = context.proof;
   const outputs = outputsOf(study, analysis);
   const linked = new Set(
@@ -126,7 +124,8 @@ function couldVerify(context: ViewContext, analysis: Analysis): AnalysisSheet['c
       if (port.dimension !== dimension || linked.has(`${id} ${port.name}`)) continue;
       const known = analysis.kind !== 'external' && isTemperature(dimension);
       if (known && port.temperature !== limit.temperature) continue;
-      const { verdict, percent } = wouldGive(context, analysis, port, requirement, limit);
+      const node = outputNode(analysis.id, port.name);
+      const { verdict, percent } = wouldGive(context, node, standards.get(node) ?? 0, requirement, limit);
       offers.push({ id, version, key, title, output: port.name, verdict, percent, bare });
     }
   }
@@ -136,20 +135,22 @@ function couldVerify(context: ViewContext, analysis: Analysis): AnalysisSheet['c
     .map(({ bare: _bare, ...offer }) => offer);
 }
 
+/** The verdict and margin that the value of a node with its standard uncertainty (SI) would give a requirement alone. */
 function wouldGive(
   { proof }: ViewContext,
-  analysis: Analysis,
-  port: Port,
+  node: string,
+  standard: number,
   requirement: Parameters<typeof requiredMargin>[1],
   limit: Parameters<typeof judge>[0],
 ): Pick<AnalysisSheet['couldVerify'][number], 'verdict' | 'percent'> {
-  const { study, model, uncertain } = proof;
-  const node = outputNode(analysis.id, port.name);
+  const { study, model } = proof;
   const outcome = model.has(node) ? model.outcome(node) : null;
   if (!outcome?.ok) return { verdict: 'not computable', percent: null };
-  const expanded = (standardOf(model, uncertain, node) ?? 0) * study.settings.k;
-  const verdict = judge(limit, outcome.value, expanded, requiredMargin(study, requirement, limit));
-  return { verdict, percent: marginView(limit, outcome.value, isTemperature(port.dimension)).percent };
+  const verdict = judge(limit, outcome.value, standard * study.settings.k, requiredMargin(study, requirement, limit));
+  return {
+    verdict,
+    percent: marginView(limit, outcome.value, isTemperature(knownDimension(limit.value.unit))).percent,
+  };
 }
 
 function stepsOpenTo(context: ViewContext, { id, version }: Analysis): CommandType[] {
