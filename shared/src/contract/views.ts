@@ -32,7 +32,8 @@ export interface PersonRef {
 
 /** Which required margin applied and how it is defined. */
 export interface RequiredMargin {
-  readonly percent: number;
+  /** Of what the margin's per cent is of; null where the limit has no per cent. */
+  readonly percent: number | null;
   readonly absolute: number;
   readonly definition: string;
   readonly source: string;
@@ -510,6 +511,8 @@ export interface EditSummary {
   readonly what: string;
   readonly before: string;
   readonly after: string;
+  /** Field by field, where one edit changes several; absent otherwise. */
+  readonly fields?: readonly { readonly field: string; readonly before: string; readonly after: string }[];
   readonly conflict: string;
   readonly command: Command;
 }

@@ -59,7 +59,8 @@ export function changeActions(sheet: ChangeSheet, situation: ActionSituation): r
         { step: 'approve', label: 'Approve', main: !vote || hasVoted, ...because(approvalProblem(sheet)) },
       ]
     : [];
-  return [...actions, ...(hasVoted ? [...votes, ...disposals] : [...disposals, ...votes])];
+  // A given vote can be changed, but is no longer what comes next.
+  return hasVoted ? [...votes, ...actions, ...disposals] : [...actions, ...disposals, ...votes];
 }
 
 function because(reason: string): { readonly reason?: string } {

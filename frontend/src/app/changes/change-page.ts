@@ -1,7 +1,9 @@
+import { BreakpointObserver } from '@angular/cdk/layout';
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { MatDialog } from '@angular/material/dialog';
 import type { ChangeSheet, EditSummary } from '@shared/contract';
-import { firstValueFrom } from 'rxjs';
+import { firstValueFrom, map } from 'rxjs';
 import { load } from '../core/http/load';
 import { UnitPreferences } from '../core/preferences/unit-preferences';
 import { NOW } from '../core/study/standpoint';
@@ -51,6 +53,12 @@ export class ChangePage {
     },
     ({ key }) => this.api.sheet(key),
     { discard: (previous, next) => previous.key !== next.key || previous.study !== next.study },
+  );
+  private readonly isNarrow = toSignal(
+    inject(BreakpointObserver)
+      .observe('(max-width: 720px)')
+      .pipe(map(({ matches }) => matches)),
+    { initialValue: false },
   );
   protected readonly form = signal<'none' | 'words' | 'add'>('none');
 
@@ -111,7 +119,9 @@ export class ChangePage {
       actions: () => {
         const sheet = this.sheet.value();
         if (sheet === undefined) return [];
-        const situation = { me: this.context.head.value()?.me.id, draft: this.draft() };
+        // On a phone the vote fills the bar; the standpoint there leads to the draft all the same.
+        const draft = this.isNarrow() && sheet.may.includes('change.vote') ? 'closed' : this.draft();
+        const situation = { me: this.context.head.value()?.me.id, draft } as const;
         return changeActions(sheet, situation).map(({ step, label, main, reason }) => ({
           label,
           run: () => void this.take(step),

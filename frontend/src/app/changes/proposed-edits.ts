@@ -11,13 +11,20 @@ const SHORT = 26;
   template: `
     <ol class="rows" aria-label="Proposed edits">
       @for (row of rows(); track row.edit.index) {
-        <li [class.long]="row.isLong">
-          <span class="what">{{ row.edit.what }}</span>
-          <del class="mono"
-            ><span class="only-heard">from </span>{{ row.edit.before
-            }}<span class="only-heard">{{ row.edit.before ? '' : 'nothing' }}</span></del
-          >
-          <ins class="mono"><span class="only-heard">to </span>{{ row.edit.after }}</ins>
+        <li>
+          @if (row.heading) {
+            <span class="heading">{{ row.heading }}</span>
+          }
+          @for (line of row.lines; track line.what) {
+            <span class="line" [class.long]="line.isLong">
+              <span [class.faint]="row.heading !== ''">{{ line.what }}</span>
+              <del class="mono" [class.words]="line.isLong"
+                ><span class="only-heard">{{ line.before ? 'from ' : 'from nothing ' }}</span
+                >{{ line.before }}</del
+              >
+              <ins class="mono" [class.words]="line.isLong"><span class="only-heard">to </span>{{ line.after }}</ins>
+            </span>
+          }
           @if (mayDrop()) {
             <button type="button" class="quiet" (click)="dropEdit.emit(row.edit)">
               Drop<span class="only-heard"> {{ row.edit.what }}</span>
@@ -34,58 +41,66 @@ const SHORT = 26;
   `,
   styles: `
     li {
+      position: relative;
+      display: grid;
+      gap: 2px;
+      padding-inline: 10px;
+    }
+    li:has(button) {
+      padding-right: 64px;
+    }
+    button {
+      position: absolute;
+      top: 7px;
+      right: 6px;
+    }
+    .line {
       display: grid;
       grid-template-columns: minmax(0, 1fr) auto minmax(84px, auto);
       gap: 0 20px;
       align-items: baseline;
-      padding-inline: 10px;
     }
-    li:has(button) {
-      grid-template-columns: minmax(0, 1fr) auto minmax(84px, auto) auto;
+    .line.long {
+      grid-template-columns: minmax(0, 1fr);
     }
-    li.none {
-      display: block;
+    .heading ~ .line.long {
+      grid-template-columns: 92px minmax(0, 1fr);
+    }
+    .heading ~ .line.long ins {
+      grid-column: 2;
     }
     del {
       color: var(--ink-2);
       text-align: right;
       text-decoration-thickness: 1px;
+      overflow-wrap: anywhere;
     }
     ins {
       font-weight: 650;
       text-align: right;
       text-decoration: none;
-    }
-    .long {
-      row-gap: 2px;
-    }
-    .long .what {
-      grid-column: 1 / -2;
-    }
-    .long:not(:has(button)) .what {
-      grid-column: 1 / -1;
-    }
-    .long del,
-    .long ins {
-      grid-row: auto;
-      grid-column: 1 / -1;
-      text-align: left;
       overflow-wrap: anywhere;
     }
-    .long del:has(.only-heard:only-child) {
-      display: none;
+    .words {
+      font: inherit;
+      font-size: 14px;
+      line-height: 20px;
+      text-align: left;
     }
-    .long button {
-      grid-row: 1;
-      grid-column: -2 / -1;
+    ins.words {
+      font-weight: 620;
     }
     .conflict {
-      grid-column: 1 / -1;
       color: var(--indeterminate);
     }
     @media (max-width: 720px) {
       li {
-        padding-inline: 0;
+        padding-left: 0;
+      }
+      li:not(:has(button)) {
+        padding-right: 0;
+      }
+      .line {
         column-gap: 12px;
       }
     }
@@ -95,7 +110,25 @@ export class ProposedEdits {
   readonly edits = input.required<readonly EditSummary[]>();
   readonly mayDrop = input(false);
   readonly dropEdit = output<EditSummary>();
-  protected readonly rows = computed(() =>
-    this.edits().map((edit) => ({ edit, isLong: edit.before.length > SHORT || edit.after.length > SHORT })),
-  );
+  protected readonly rows = computed(() => this.edits().map((edit) => ({ edit, ...linesOf(edit) })));
+}
+
+interface EditLine {
+  readonly what: string;
+  readonly before: string;
+  readonly after: string;
+  readonly isLong: boolean;
+}
+
+/** An edit of several fields has a heading and a line for each of them, another only a line. */
+function linesOf(edit: EditSummary): { readonly heading: string; readonly lines: readonly EditLine[] } {
+  const line = (what: string, { before, after }: { readonly before: string; readonly after: string }): EditLine => ({
+    what,
+    before,
+    after,
+    isLong: before.length > SHORT || after.length > SHORT,
+  });
+  if (edit.fields === undefined) return { heading: '', lines: [line(edit.what, edit)] };
+  const heading = edit.what.slice(0, -`: ${edit.fields.map(({ field }) => field).join(', ')}`.length);
+  return { heading, lines: edit.fields.map((field) => line(field.field, field)) };
 }

@@ -116,12 +116,10 @@ export class Compliance {
   constructor() {
     inject(TitleBlock).register({
       actions: () => {
-        const unready = { disabled: true, reason: 'The matrix is still being read.' };
-        const blocked = this.matrix.value() === undefined ? unready : {};
         return [
-          { label: 'CSV', run: () => void this.export('csv'), ...blocked },
-          { label: 'XLSX', run: () => void this.export('xlsx'), ...blocked },
-          { label: 'Export DOCX', main: true, run: () => void this.export('docx'), ...blocked },
+          { label: 'CSV', run: () => void this.export('csv') },
+          { label: 'XLSX', run: () => void this.export('xlsx') },
+          { label: 'Export DOCX', main: true, run: () => void this.export('docx') },
         ];
       },
     });

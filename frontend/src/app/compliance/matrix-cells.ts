@@ -49,6 +49,13 @@ export class RequirementCell extends MatrixCell {
       <dp-verdict-mark [verdict]="row.verdict" />
     }
   `,
+  styles: `
+    :host {
+      display: flex;
+      align-items: center;
+      height: var(--row);
+    }
+  `,
 })
 export class VerdictCell extends MatrixCell {}
 

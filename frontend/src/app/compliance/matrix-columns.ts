@@ -1,21 +1,30 @@
 import type { MatrixRow } from '@shared/contract';
+import { formatSi } from '@shared/units';
 import type { ColDef } from 'ag-grid-community';
 import { limitText } from '../ui/limit/limit-text';
 import type { ShowNumber } from '../ui/measure/show-number';
 import { WORST_FIRST } from '../ui/verdict/verdict-words';
 import { MarginCell, RequirementCell, VerdictCell } from './matrix-cells';
 
-/** "39.1 ± 0.6 km/s (k = 2)", or nothing where there is no computed value. */
-export function assessedText(row: MatrixRow, show: ShowNumber): string {
+/** How numbers are shown: in the unit that the person prefers. */
+export interface MatrixNumbers {
+  readonly show: ShowNumber;
+  readonly unitFor: (si: number, unit: string) => string;
+}
+
+/** "39.1 ± 0.71 km/s", value and uncertainty in one unit; nothing where there is no computed value. */
+export function assessedText(row: MatrixRow, numbers: MatrixNumbers): string {
   if (row.value === null) return '';
-  const { si, unit, difference } = row.value;
-  const value = show(si, unit, difference ? { temperature: 'difference' } : {});
-  if (row.expanded === null) return value;
-  return `${value} ± ${show(row.expanded, unit, { temperature: 'difference' })}`;
+  const { si, difference } = row.value;
+  const unit = numbers.unitFor(si, row.value.unit);
+  const temperature = difference ? ('difference' as const) : ('absolute' as const);
+  if (row.expanded === null) return formatSi(si, unit, { temperature });
+  const value = formatSi(si, unit, { temperature, withUnit: false });
+  return `${value} ± ${formatSi(row.expanded, unit, { temperature: 'difference', digits: 2 })}`;
 }
 
 /** The columns of the matrix: what one reads first stands first, the rest in the order of the exported matrix. */
-export function matrixColumns(show: ShowNumber, withStatements: boolean, sort: string): ColDef<MatrixRow>[] {
+export function matrixColumns(numbers: MatrixNumbers, withStatements: boolean, sort: string): ColDef<MatrixRow>[] {
   const words = (colId: string, headerName: string, width: number, text: (row: MatrixRow) => string) =>
     ({
       colId,
@@ -39,15 +48,15 @@ export function matrixColumns(show: ShowNumber, withStatements: boolean, sort: s
       cellStyle: { lineHeight: '20px', paddingTop: '7px', paddingBottom: '7px' },
     },
     {
-      ...words('required', 'Required', 130, (row) => limitText(row.limit, show)),
+      ...words('required', 'Required', 130, (row) => limitText(row.limit, numbers.show)),
       type: 'rightAligned',
-      cellClass: 'mono',
+      cellClass: 'mono ag-right-aligned-cell',
       comparator: (_a, _b, a, b) => order(a.data?.limit?.value.si, b.data?.limit?.value.si),
     },
     {
-      ...words('assessed', 'Assessed ± U', 180, (row) => assessedText(row, show)),
+      ...words('assessed', 'Assessed ± U', 190, (row) => assessedText(row, numbers)),
       type: 'rightAligned',
-      cellClass: 'mono',
+      cellClass: 'mono ag-right-aligned-cell',
       comparator: (_a, _b, a, b) => order(a.data?.value?.si, b.data?.value?.si),
     },
     {

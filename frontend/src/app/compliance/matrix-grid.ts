@@ -42,15 +42,17 @@ export class MatrixGrid {
   readonly openRow = output<MatrixRow>();
   readonly sortChange = output<string>();
 
+  private readonly numbers = {
+    show: this.units.show.bind(this.units),
+    unitFor: this.units.unitFor.bind(this.units),
+  };
   protected readonly options: GridOptions<MatrixRow> = {
     ...gridBasics<MatrixRow>(),
     getRowId: ({ data }: GetRowIdParams<MatrixRow>) => data.id,
     overlayNoRowsTemplate: '<span>No row matches. Choose “All” or clear the filters.</span>',
   };
   protected readonly rowData = computed(() => [...this.rows()]);
-  protected readonly columns = computed(() =>
-    matrixColumns(this.units.show.bind(this.units), this.statements(), this.sort()),
-  );
+  protected readonly columns = computed(() => matrixColumns(this.numbers, this.statements(), this.sort()));
 
   constructor() {
     ModuleRegistry.registerModules([RowAutoHeightModule]);

@@ -72,13 +72,14 @@ export class MatrixList {
   readonly statements = input(false);
 
   protected readonly show = this.units.show.bind(this.units);
+  private readonly numbers = { show: this.show, unitFor: this.units.unitFor.bind(this.units) };
   protected readonly entries = computed(() =>
     this.rows().map((row) => ({
       row,
       to: this.context.link('requirements', row.key),
       unit: row.limit?.value.unit ?? '',
       limit: limitText(row.limit, this.show),
-      assessed: assessedText(row, this.show),
+      assessed: assessedText(row, this.numbers),
       compliance: [row.compliance, row.basis ?? '', row.closeOut].filter((word) => word !== '').join(' · '),
     })),
   );

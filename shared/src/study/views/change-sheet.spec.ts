@@ -93,6 +93,23 @@ describe('proposed edits in words', () => {
     ]);
   });
 
+  it('say each field apart where one edit changes several', () => {
+    const study = smallStudy();
+    write(study, OWNER, {
+      type: 'quantity.set',
+      id: ID.isp,
+      version: 1,
+      value: { text: '6300', unit: 's' },
+      source: 'bench test 12',
+    });
+    const [edited] = editSummaries(study, study.get('change', CHANGE)!, () => 'somebody');
+    expect(edited?.what).toBe('Specific impulse: value, source');
+    expect(edited?.fields).toEqual([
+      { field: 'value', before: '6\u2009500 s', after: '6\u2009300 s' },
+      { field: 'source', before: 'for tests', after: 'bench test 12' },
+    ]);
+  });
+
   it('name the edit whose target has moved, and not the later ones that follow on from it', () => {
     const study = smallStudy();
     write(

@@ -7,7 +7,7 @@ import { budgetInWords, capitalised, limitInWords, measureInWords, uncertaintyIn
 import { walkEdits } from './proposed-edits';
 
 /** What one edit does, in words; the key of what it creates is known only once it is applied. */
-export type EditWords = Pick<EditSummary, 'key' | 'what' | 'before' | 'after'>;
+export type EditWords = Pick<EditSummary, 'key' | 'what' | 'before' | 'after' | 'fields'>;
 
 /**
  * Every edit of a change request in words: what, from, to, and whether its target has moved. Of an approved request
@@ -29,7 +29,7 @@ export function editSummaries(
       index,
       type: edit.type,
       ...words,
-      before: approved && !before ? '' : words.before,
+      ...(approved && !before ? withoutBefore(words) : {}),
       conflict: isOpen(change) ? conflict : '',
       command: edit,
     });
@@ -51,7 +51,7 @@ export function editSummaries(
 export function editInWords(study: Study, edit: Command, names: EntityNames): EditWords {
   switch (edit.type) {
     case 'policy.create':
-      return written('', `Margin policy for ${edit.parameter}, ${edit.maturity}`, `${edit.percent} %`);
+      return written('', `Margin policy for ${edit.parameter}, ${edit.maturity}`, askedMarginInWords(edit));
     case 'element.create':
       return written(edit.key, `New element ${edit.key}`, edit.name);
     case 'requirement.create':
@@ -132,6 +132,11 @@ export function editInWords(study: Study, edit: Command, names: EntityNames): Ed
   }
 }
 
+/** The words of an edit whose old values are not known. */
+function withoutBefore({ fields }: EditWords): Pick<EditWords, 'before' | 'fields'> {
+  return { before: '', ...(fields ? { fields: fields.map((field) => ({ ...field, before: '' })) } : {}) };
+}
+
 function written(key: string, what: string, after: string): EditWords {
   return { key, what, before: '', after };
 }
@@ -194,6 +199,7 @@ function revisedInWords<K extends EntityKind>(
     what: `${name}: ${fields.map(({ field }) => field).join(', ')}`,
     before: fields.map((field) => `${field.field} ${field.before}`).join('; '),
     after: fields.map((field) => `${field.field} ${field.after}`).join('; '),
+    fields,
   };
 }
 
