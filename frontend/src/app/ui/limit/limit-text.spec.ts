@@ -20,6 +20,12 @@ describe('limitText', () => {
     expect(limitText(null)).toBe('');
   });
 
+  it('keeps the digits as typed in the unit in which they were typed, and only there', () => {
+    const typed: Limit = { ...base, value: { text: '38.0', unit: 'km/s', si: 38_000 } };
+    expect(limitText(typed)).toMatch(/^≥\u00a038\.0\s?km\/s$/);
+    expect(limitText(typed, () => '38 000 m/s')).toBe('≥\u00a038 000 m/s');
+  });
+
   it('writes the tolerance of a temperature as a difference, not as a temperature', () => {
     const limit: Limit = {
       ...base,
