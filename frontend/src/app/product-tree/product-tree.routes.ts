@@ -1,3 +1,5 @@
-import { Routes } from '@angular/router';
+import { type Routes } from '@angular/router';
 
-export default [] satisfies Routes;
+export default [
+  { path: '', loadComponent: () => import('./product-tree').then((file) => file.ProductTree) },
+] satisfies Routes;
