@@ -2,9 +2,9 @@ import { Injectable, inject } from '@angular/core';
 import type { ElementRow } from '@shared/contract';
 import { firstValueFrom } from 'rxjs';
 import { Edits } from '../core/study/edits';
-import { Acts } from '../requirements/acts';
-import { AskFields } from '../requirements/dialog/ask-fields';
-import { type AskedField } from '../requirements/dialog/fields-dialog';
+import { Acts } from '../core/acts/acts';
+import { AskFields } from '../core/acts/ask-fields';
+import { type AskedField } from '../core/acts/fields-dialog';
 import { Ask } from '../ui/ask/ask';
 import { branchOf } from './element-lines';
 

@@ -6,8 +6,8 @@ import { ErrorLine } from '../core/errors/error-line';
 import { type ProblemError, fieldSentence, toProblem } from '../core/http/problem-error';
 import { Edits } from '../core/study/edits';
 import { StudyContext } from '../core/study/study-context';
-import { Acts } from '../requirements/acts';
-import { ProposeChange } from '../requirements/propose/propose-change';
+import { Acts } from '../core/acts/acts';
+import { ProposeChange } from '../core/acts/propose-change';
 import { BASES, type EditedField, readUncertainty, readValue, valueText } from './quantity-text';
 
 /** What was typed into a cell and is on its way, or was refused and why. */

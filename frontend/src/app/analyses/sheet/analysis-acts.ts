@@ -6,8 +6,8 @@ import { ErrorLine } from '../../core/errors/error-line';
 import { toProblem } from '../../core/http/problem-error';
 import { Edits } from '../../core/study/edits';
 import { StudyContext } from '../../core/study/study-context';
-import { Acts } from '../../requirements/acts';
-import { ProposeChange } from '../../requirements/propose/propose-change';
+import { Acts } from '../../core/acts/acts';
+import { ProposeChange } from '../../core/acts/propose-change';
 import { Ask } from '../../ui/ask/ask';
 
 /** Steps on an analysis beside writing it: link, check, remove, propose, take a newer method. */

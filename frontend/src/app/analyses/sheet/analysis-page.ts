@@ -11,7 +11,7 @@ import { UnitPreferences } from '../../core/preferences/unit-preferences';
 import { Edits } from '../../core/study/edits';
 import { StudyContext } from '../../core/study/study-context';
 import { type SheetAction, TitleBlock } from '../../core/title-block';
-import { Acts } from '../../requirements/acts';
+import { Acts } from '../../core/acts/acts';
 import { ConflictView, type Side } from '../../ui/conflict/conflict-view';
 import { ProofLines } from '../../ui/proof/proof-lines';
 import { Waiting } from '../../ui/waiting/waiting';

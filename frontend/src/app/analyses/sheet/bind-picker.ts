@@ -52,7 +52,9 @@ let count = 0;
             [class.active]="index === active()"
             [attr.aria-selected]="index === active()"
             (mousedown)="$event.preventDefault()"
+            tabindex="-1"
             (click)="take(option.source)"
+            (keydown.enter)="take(option.source)"
           >
             <span class="key">{{ option.source.key }}</span>
             <span class="words">

@@ -23,21 +23,20 @@ import { UnitPreferences } from '../../core/preferences/unit-preferences';
 import { Edits } from '../../core/study/edits';
 import { StudyContext } from '../../core/study/study-context';
 import { type SheetAction, TitleBlock } from '../../core/title-block';
-import { Acts } from '../../requirements/acts';
-import { ProposeChange } from '../../requirements/propose/propose-change';
+import { Acts } from '../../core/acts/acts';
+import { ProposeChange } from '../../core/acts/propose-change';
 import { Ask } from '../../ui/ask/ask';
 import { type ConflictField, ConflictView, type Side } from '../../ui/conflict/conflict-view';
 import { Control, Field } from '../../ui/field/field';
 import { QuantityField } from '../../ui/measure/quantity-field';
 import { Tex } from '../../ui/proof/tex';
 import { Waiting } from '../../ui/waiting/waiting';
-import { refusedField } from '../../requirements/form/refused-field';
+import { refusedField } from '../../core/acts/refused-field';
 import { QuantitiesApi } from '../quantities-api';
 import { QuantityEdits } from '../quantity-edits';
 import { BASES, shownUncertainty, shownValue } from '../quantity-text';
 import {
   BLANK,
-  type QuantityText,
   type QuantityTextField,
   boundsInWords,
   changedFields,
@@ -114,7 +113,7 @@ export class QuantityPage {
   );
 
   protected readonly form = inject(NonNullableFormBuilder).group({ ...BLANK });
-  protected readonly typed = toSignal(this.form.valueChanges.pipe(map(() => this.form.getRawValue() as QuantityText)), {
+  protected readonly typed = toSignal(this.form.valueChanges.pipe(map(() => this.form.getRawValue())), {
     initialValue: BLANK,
   });
   protected readonly isRestored = signal(false);

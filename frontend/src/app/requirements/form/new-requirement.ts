@@ -18,12 +18,12 @@ import { type ProblemError, toProblem } from '../../core/http/problem-error';
 import { Edits } from '../../core/study/edits';
 import { StudyContext } from '../../core/study/study-context';
 import { TitleBlock } from '../../core/title-block';
-import { Acts } from '../acts';
+import { Acts } from '../../core/acts/acts';
 import { RequirementApi } from '../requirement-api';
 import { formOf } from './form-of';
 import { RequirementFields } from './requirement-fields';
 import { BLANK, faultsOf, fieldsOf } from './requirement-text';
-import { refusedField } from './refused-field';
+import { refusedField } from '../../core/acts/refused-field';
 
 /** Writes a new requirement, under one or more parents; opens its sheet when it is saved. */
 @Component({

@@ -6,7 +6,7 @@ import { startWith, switchMap } from 'rxjs';
 import { type ProblemError } from '../../core/http/problem-error';
 import { StudyContext } from '../../core/study/study-context';
 import { Control, Field } from '../../ui/field/field';
-import { refusedField } from './refused-field';
+import { refusedField } from '../../core/acts/refused-field';
 import { BLANK, type RequirementText, faultsOf } from './requirement-text';
 import { isTypedTemperature, readAny, understood } from './typed-limit';
 

@@ -4,9 +4,9 @@ import { firstValueFrom } from 'rxjs';
 import { Edits } from '../../core/study/edits';
 import { StudyContext } from '../../core/study/study-context';
 import { Ask } from '../../ui/ask/ask';
-import { Acts } from '../acts';
-import { AskFields } from '../dialog/ask-fields';
-import { ProposeChange } from '../propose/propose-change';
+import { Acts } from '../../core/acts/acts';
+import { AskFields } from '../../core/acts/ask-fields';
+import { ProposeChange } from '../../core/acts/propose-change';
 
 const RULES = ['sum', 'product', 'root-sum-square', 'smallest', 'largest'] as const;
 const SENSES = ['shares', 'demands', 'contributions'] as const;

@@ -3,8 +3,8 @@ import type { Command, Compliance, Departure, RequirementSheet } from '@shared/c
 import { firstValueFrom } from 'rxjs';
 import { Edits } from '../../core/study/edits';
 import { Ask } from '../../ui/ask/ask';
-import { Acts } from '../acts';
-import { AskFields } from '../dialog/ask-fields';
+import { Acts } from '../../core/acts/acts';
+import { AskFields } from '../../core/acts/ask-fields';
 
 const HIGHEST_FIRST: readonly Compliance[] = ['yes', 'partial', 'no', 'not assessed'];
 

@@ -16,7 +16,7 @@ import { ProofLines } from '../../ui/proof/proof-lines';
 import { TurningPoints } from '../../ui/turning-point/turning-points';
 import { VerdictMark } from '../../ui/verdict/verdict-mark';
 import { Waiting } from '../../ui/waiting/waiting';
-import { ProposeChange } from '../propose/propose-change';
+import { ProposeChange } from '../../core/acts/propose-change';
 import { RequirementApi } from '../requirement-api';
 import { BudgetActs } from './budget-acts';
 import { DeparturesPart } from './departures-part';
@@ -89,9 +89,14 @@ export class RequirementPage {
     return `limit ${limitText(sheet.limit, this.show)}${expanded}`;
   });
   protected readonly required = computed(() => {
-    const required = this.state.value()?.required;
-    if (!required) return '';
-    return `${percentText(required.percent).replace('+', '')} required: ${required.definition}. ${required.source}`;
+    const sheet = this.state.value();
+    const required = sheet?.required;
+    if (!sheet?.limit || !required) return '';
+    const margin =
+      required.percent === null
+        ? this.show(required.absolute, sheet.limit.value.unit, { temperature: 'difference' })
+        : percentText(required.percent).replace('+', '');
+    return `${margin} required: ${required.definition}. ${required.source}`;
   });
   /** What the per cent is of, where it is not of the limit. */
   protected readonly percentOf = computed(() => {

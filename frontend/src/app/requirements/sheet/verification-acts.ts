@@ -6,9 +6,9 @@ import { ErrorLine } from '../../core/errors/error-line';
 import { UnitPreferences } from '../../core/preferences/unit-preferences';
 import { Edits } from '../../core/study/edits';
 import { Ask } from '../../ui/ask/ask';
-import { Acts } from '../acts';
-import { AskFields } from '../dialog/ask-fields';
-import { type AskedField, type Values } from '../dialog/fields-dialog';
+import { Acts } from '../../core/acts/acts';
+import { AskFields } from '../../core/acts/ask-fields';
+import { type AskedField, type Values } from '../../core/acts/fields-dialog';
 import { RequirementApi } from '../requirement-api';
 
 type Method = VerificationView['method'];

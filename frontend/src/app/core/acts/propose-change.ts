@@ -2,11 +2,11 @@ import { Injectable, inject } from '@angular/core';
 import { Router } from '@angular/router';
 import type { EditCommand } from '@shared/contract';
 import { firstValueFrom } from 'rxjs';
-import { Edits } from '../../core/study/edits';
-import { StudyContext } from '../../core/study/study-context';
-import { Acts } from '../acts';
-import { AskFields } from '../dialog/ask-fields';
-import { type Values } from '../dialog/fields-dialog';
+import { Edits } from '../study/edits';
+import { StudyContext } from '../study/study-context';
+import { Acts } from './acts';
+import { AskFields } from './ask-fields';
+import { type Values } from './fields-dialog';
 
 /** What is to be proposed. Without edits the draft is opened, and every edit made while looking from it goes into it. */
 export interface Proposal {

@@ -1,10 +1,10 @@
 import { Injectable, inject } from '@angular/core';
 import type { Command, EditAnswer } from '@shared/contract';
 import { firstValueFrom } from 'rxjs';
-import { ErrorLine } from '../core/errors/error-line';
-import { toProblem } from '../core/http/problem-error';
-import { type EditOptions, Edits } from '../core/study/edits';
-import { StudyContext } from '../core/study/study-context';
+import { ErrorLine } from '../errors/error-line';
+import { toProblem } from '../http/problem-error';
+import { type EditOptions, Edits } from '../study/edits';
+import { StudyContext } from '../study/study-context';
 
 /** Gives edits from buttons: says what came of it in the quiet line, also when it was refused. */
 @Injectable({ providedIn: 'root' })

@@ -1,4 +1,4 @@
-import { type ProblemError, fieldSentence } from '../../core/http/problem-error';
+import { type ProblemError, fieldSentence } from '../http/problem-error';
 
 /** The refusal of one field of a command, by its whole path below the command, such as "limit.value"; empty when it was not refused. */
 export function refusedField(problem: ProblemError | null, ...paths: readonly string[]): string {

@@ -8,9 +8,9 @@ import {
   MatDialogRef,
   MatDialogTitle,
 } from '@angular/material/dialog';
-import { type ProblemError, toProblem } from '../../core/http/problem-error';
+import { type ProblemError, toProblem } from '../http/problem-error';
 import { Control, Field } from '../../ui/field/field';
-import { refusedField } from '../form/refused-field';
+import { refusedField } from './refused-field';
 
 export type Values = Readonly<Record<string, string>>;
 
