@@ -24,6 +24,7 @@ export const policy =
       parameter,
       maturity: 'concept',
       percent,
+      absolute: null,
       definition,
       source,
     },

@@ -29,6 +29,13 @@ const OpenItemInput = z.strictObject({
   due: Day,
   rationale: Free(500),
 });
+const policyFields = {
+  percent: z.number().min(0).max(1000),
+  /** Required margin as a difference: for limits of zero and on differences, which have no per cent. */
+  absolute: MeasureInput.nullable().default(null),
+  definition: Line(300),
+  source: Line(300),
+};
 const BudgetInput = z.strictObject({ rule: z.enum(BUDGET_RULES), sense: z.enum(BUDGET_SENSES) });
 const requirementFields = {
   title: Line(200),
@@ -124,11 +131,9 @@ export const EDIT_COMMANDS = [
   created('policy.create', {
     parameter: Line(60),
     maturity: Line(40),
-    percent: z.number().min(0).max(1000),
-    definition: Line(300),
-    source: Line(300),
+    ...policyFields,
   }),
-  targeted('policy.revise', { percent: z.number().min(0).max(1000), definition: Line(300), source: Line(300) }),
+  targeted('policy.revise', policyFields),
   targeted('policy.remove', {}),
   created('element.create', {
     key: z.string().regex(/^[A-Z][A-Z0-9]{1,7}$/, 'must be 2 to 8 capital letters or digits, such as RAD'),

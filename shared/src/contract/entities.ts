@@ -29,6 +29,11 @@ export interface Policy extends Entity {
   readonly parameter: string;
   readonly maturity: string;
   readonly percent: number;
+  /**
+   * Required margin as a difference from the limit, for limits of its dimension; it goes before the per cent. Rows
+   * written before there were absolute margins come without it.
+   */
+  readonly absolute: Measure | null;
   readonly definition: string;
   readonly source: string;
 }

@@ -123,6 +123,7 @@ const steps: fc.Arbitrary<Step> = fc.oneof(
         id: ID.policy,
         version: version(study, 'policy', ID.policy),
         percent,
+        absolute: null,
         definition: 'x',
         source: '',
       },

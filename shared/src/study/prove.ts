@@ -1,7 +1,6 @@
 import type {
   Compliance,
   Finding,
-  Limit,
   MarginView,
   Patch,
   Requirement,

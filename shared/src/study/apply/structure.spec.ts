@@ -45,6 +45,7 @@ describe('settings and margin policy', () => {
       parameter: 'delta-v',
       maturity: 'concept',
       percent: 5,
+      absolute: null,
       definition: 'd',
       source: 's',
     } as const;

@@ -1,5 +1,6 @@
-import type { Element } from '@shared/contract';
+import type { Element, Measure, MeasureInput } from '@shared/contract';
 import { type Apply, freshId, given, labelOf, referred, revised, target } from '../edit-context';
+import { readMeasure } from '../measures';
 import { Refusal, invalid } from '../refusal';
 import { refuseReservedPrefix } from './requirements';
 
@@ -11,7 +12,7 @@ export const configureStudy: Apply<'study.configure'> = (study, command) => {
 
 /** Adds a row to the margin policy; one row per parameter and maturity. */
 export const createPolicy: Apply<'policy.create'> = (study, command, context) => {
-  const { type: _type, id: _id, ...fields } = command;
+  const { type: _type, id: _id, absolute, ...fields } = command;
   const same = study
     .all('policy')
     .find((row) => row.parameter === fields.parameter && row.maturity === fields.maturity);
@@ -21,14 +22,24 @@ export const createPolicy: Apply<'policy.create'> = (study, command, context) =>
       fields.parameter,
       `there is already a row for ${fields.parameter} at maturity ${fields.maturity}; revise that one.`,
     );
-  study.put('policy', { id: freshId(study, 'policy', command, context), version: 1, ...fields });
+  study.put('policy', { id: freshId(study, 'policy', command, context), version: 1, ...fields, absolute: readAbsoluteMargin(absolute) });
 };
 
 /** Changes a row of the margin policy. */
 export const revisePolicy: Apply<'policy.revise'> = (study, command) => {
   const { percent, definition, source } = command;
-  revised(study, 'policy', target(study, 'policy', command), { percent, definition, source });
+  const absolute = readAbsoluteMargin(command.absolute);
+  revised(study, 'policy', target(study, 'policy', command), { percent, absolute, definition, source });
 };
+
+/** Reads a required margin: a difference above zero. Commands kept from before there were absolute margins have none. */
+function readAbsoluteMargin(input: MeasureInput | null | undefined): Measure | null {
+  if (!input) return null;
+  const absolute = readMeasure('absolute', input, null, 'difference');
+  if (!(absolute.si > 0))
+    throw invalid('absolute', `${input.text} ${input.unit}`.trim(), 'a margin above zero is needed, or none.');
+  return absolute;
+}
 
 /** Removes a row of the margin policy. */
 export const removePolicy: Apply<'policy.remove'> = (study, command) => {

@@ -205,7 +205,7 @@ describe('taking back is refused', () => {
     edit(study, ANALYST, verifiedBy(idOf(82), ID.mass, ID.rollUp, 'm_0'));
     expect(undoRefused(study, ANALYST, unlinked).message).toContain('linked to VEH-002 again');
 
-    const row = { parameter: 'delta-v', maturity: 'concept', percent: 5, definition: 'd', source: 's' };
+    const row = { parameter: 'delta-v', maturity: 'concept', percent: 5, absolute: null, definition: 'd', source: 's' };
     const policy = edit(study, OWNER, { type: 'policy.remove', id: ID.policy, version: 1 });
     edit(study, OWNER, { type: 'policy.create', id: idOf(83), ...row });
     expect(undoRefused(study, OWNER, policy).message).toContain('margin policy');

@@ -233,6 +233,7 @@ export function smallStudy(): Study {
       parameter: 'delta-v',
       maturity: 'concept',
       percent: 5,
+      absolute: null,
       definition: 'per cent of the limit',
       source: 'for tests',
     },

@@ -70,6 +70,7 @@ describe('proposed edits in words', () => {
         id: ID.policy,
         version: 1,
         percent: 7,
+        absolute: null,
         definition: 'per cent of the limit',
         source: 'for tests',
       },

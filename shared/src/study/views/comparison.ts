@@ -1,4 +1,4 @@
-import type { Limit, MarginView, Requirement, VerdictView } from '@shared/contract';
+import type { Limit, MarginView, RequiredMargin, Requirement, VerdictView } from '@shared/contract';
 import { formatNumber, fromSi, parseUnit, prettyUnit } from '@shared/units';
 import { isTemperature, knownDimension } from '../analysis-ports';
 import { numberTex, PROOF_DIGITS, typedTex, unitTex } from './number-tex';
@@ -21,6 +21,11 @@ export function marginInWords(limit: Limit, margin: MarginView): string {
   return `${percentInWords(margin.percent)}${of}`;
 }
 
+/** A required margin in words: in per cent where the limit has one, else in the limit's unit. */
+export function requiredInWords(limit: Limit, required: RequiredMargin): string {
+  return required.percent === null ? signedIn(limit, required.absolute) : percentInWords(required.percent);
+}
+
 function signedIn(limit: Limit, si: number): string {
   const { unit } = limit.value;
   const parsed = parseUnit(unit);
@@ -36,7 +41,7 @@ export function comparisonOf(
   const { value, margin, required } = verdict;
   if (!limit || !value || !margin) return null;
   const parts = [`margin ${marginInWords(limit, margin)}`];
-  if (required) parts.push(`required ${percentInWords(required.percent)}`);
+  if (required) parts.push(`required ${requiredInWords(limit, required)}`);
   if (margin.atLimit) parts.push('at the limit');
   return { tex: relationTex(limit, value.si, margin.absolute >= 0), text: parts.join(', ') };
 }

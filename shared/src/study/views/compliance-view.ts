@@ -6,13 +6,14 @@ import {
   type MatrixHeader,
   type MatrixRow,
   type Requirement,
+  type Limit,
   type RequiredMargin,
   type Verdict,
   type Verification,
 } from '@shared/contract';
 import { methodOf } from '../analysis-ports';
 import { definitionDigest } from '../apply/analyses';
-import { percentInWords } from './comparison';
+import { requiredInWords } from './comparison';
 import { parentsOf } from './requirements-view';
 import { byKey, countVerdicts, provenOf, requirementsInForce, verdictView } from './verdict-view';
 import { personRef, type ViewContext } from './view-context';
@@ -105,7 +106,7 @@ function matrixRow(context: ViewContext, requirement: Requirement): MatrixRow {
     value,
     expanded,
     k,
-    policy: policyInWords(required),
+    policy: policyInWords(limit, required),
     margin,
     required,
     compliance,
@@ -130,10 +131,10 @@ function distinct(words: readonly string[]): string {
   return [...new Set(words.filter(Boolean))].join('; ');
 }
 
-function policyInWords(required: RequiredMargin | null): string {
-  if (!required) return '';
+function policyInWords(limit: Limit | null, required: RequiredMargin | null): string {
+  if (!limit || !required) return '';
   const source = required.source ? ` (${required.source})` : '';
-  return `${percentInWords(required.percent)}, ${required.definition}${source}`;
+  return `${requiredInWords(limit, required)}, ${required.definition}${source}`;
 }
 
 /** "deviation DEV-001 in force until 2027-01-31 for items 1 to 3". */

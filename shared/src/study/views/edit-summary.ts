@@ -3,7 +3,14 @@ import { isOpen, targetKind } from '../change-requests';
 import type { Study } from '../study';
 import { entityNames, type EntityNames } from './entity-names';
 import { fieldChanges, headline, sameFields } from './field-changes';
-import { budgetInWords, capitalised, limitInWords, measureInWords, uncertaintyInWords } from './in-words';
+import {
+  askedMarginInWords,
+  budgetInWords,
+  capitalised,
+  limitInWords,
+  measureInWords,
+  uncertaintyInWords,
+} from './in-words';
 import { walkEdits } from './proposed-edits';
 
 /** What one edit does, in words; the key of what it creates is known only once it is applied. */
@@ -110,7 +117,7 @@ export function editInWords(study: Study, edit: Command, names: EntityNames): Ed
         study,
         'policy',
         edit.id,
-        { percent: edit.percent, definition: edit.definition, source: edit.source },
+        { percent: edit.percent, absolute: edit.absolute, definition: edit.definition, source: edit.source },
         names,
       );
     case 'study.configure':

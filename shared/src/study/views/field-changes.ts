@@ -6,11 +6,12 @@ import type {
   EntityKinds,
   FormulaLine,
   Limit,
+  Measure,
   OpenItem,
   Uncertainty,
 } from '@shared/contract';
 import type { EntityNames } from './entity-names';
-import { budgetInWords, limitInWords, measureInWords, uncertaintyInWords } from './in-words';
+import { askedMarginInWords, budgetInWords, limitInWords, measureInWords, uncertaintyInWords } from './in-words';
 
 /** One field of an entity as it was and as it is, in words. */
 export interface FieldChange {
@@ -60,6 +61,7 @@ const FIELDS: { readonly [K in EntityKind]: FieldTable<EntityKinds[K]> } = {
   },
   policy: {
     percent: ['required margin', (value) => `${value} %`],
+    absolute: ['absolute required margin', (value: Measure | null) => (value ? measureInWords(value) : 'none')],
     definition: ['definition', text],
     source: ['source', text],
   },
@@ -200,7 +202,7 @@ export function headline<K extends EntityKind>(kind: K, entity: EntityKinds[K], 
     case 'study':
       return (entity as EntityKinds['study']).name;
     case 'policy':
-      return `${(entity as EntityKinds['policy']).percent} %`;
+      return askedMarginInWords(entity as EntityKinds['policy']);
     case 'element':
       return (entity as EntityKinds['element']).name;
     case 'requirement': {

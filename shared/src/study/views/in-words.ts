@@ -42,6 +42,16 @@ export function limitInWords(limit: Limit | LimitInput | null | undefined): stri
   }
 }
 
+/** What a row of the margin policy asks for: "5 %", "5 K", or "5 K, else 5 %" where limits of other dimensions get a per cent. */
+export function askedMarginInWords({ percent, absolute }: AskedMargin): string {
+  if (!absolute) return `${percent} %`;
+  return percent > 0 ? `${measureInWords(absolute)}, else ${percent} %` : measureInWords(absolute);
+}
+interface AskedMargin {
+  readonly percent: number;
+  readonly absolute?: MeasureInput | null;
+}
+
 /** A budget: "sum of demands". */
 export function budgetInWords(budget: Budget | null | undefined): string {
   return budget ? `${budget.rule} of ${budget.sense}` : 'no budget';

@@ -38,7 +38,15 @@ describe('the overview', () => {
       study,
       OWNER,
       { type: 'requirement.revise', id: ID.mass, version: 1, changes: { limit: limit('at most', '130', 't') } },
-      { type: 'policy.revise', id: ID.policy, version: 1, percent: 2, definition: 'of the limit', source: '' },
+      {
+        type: 'policy.revise',
+        id: ID.policy,
+        version: 1,
+        percent: 2,
+        absolute: null,
+        definition: 'of the limit',
+        source: '',
+      },
       { type: 'requirement.withdraw', id: ID.outbound, version: 1, reason: 'not needed' },
     );
     expect(overview(study)).toMatchObject({ closes: true, total: 2 });
