@@ -55,7 +55,15 @@ function workingLife(): { accepted: Set<CommandType>; study: Study } {
     definition: 'd',
     source: 's',
   });
-  give(OWNER, { type: 'policy.revise', id: idOf(70), version: 1, percent: 12, absolute: null, definition: 'd', source: 's' });
+  give(OWNER, {
+    type: 'policy.revise',
+    id: idOf(70),
+    version: 1,
+    percent: 12,
+    absolute: null,
+    definition: 'd',
+    source: 's',
+  });
   give(OWNER, { type: 'policy.remove', id: idOf(70), version: 2 });
   give(ANALYST, {
     type: 'element.create',

@@ -22,7 +22,12 @@ export const createPolicy: Apply<'policy.create'> = (study, command, context) =>
       fields.parameter,
       `there is already a row for ${fields.parameter} at maturity ${fields.maturity}; revise that one.`,
     );
-  study.put('policy', { id: freshId(study, 'policy', command, context), version: 1, ...fields, absolute: readAbsoluteMargin(absolute) });
+  study.put('policy', {
+    id: freshId(study, 'policy', command, context),
+    version: 1,
+    ...fields,
+    absolute: readAbsoluteMargin(absolute),
+  });
 };
 
 /** Changes a row of the margin policy. */

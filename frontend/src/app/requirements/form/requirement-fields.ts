@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, input, si
 import { toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { type FormControl, type FormGroup, ReactiveFormsModule } from '@angular/forms';
 import type { ElementRow } from '@shared/contract';
+import { prettyUnit } from '@shared/units';
 import { startWith, switchMap } from 'rxjs';
 import { type ProblemError } from '../../core/http/problem-error';
 import { StudyContext } from '../../core/study/study-context';
@@ -63,9 +64,12 @@ export class RequirementFields {
     if (parameter === '') return 'What the limit is about; the margin policy asks for a margin by it.';
     const maturity = this.head()?.study.maturity;
     const policy = this.head()?.policies.find((row) => row.parameter === parameter && row.maturity === maturity);
-    return policy === undefined
-      ? 'No margin is asked for at this maturity.'
-      : `The policy asks for a margin of ${policy.percent} % at ${policy.maturity}.`;
+    if (policy === undefined) return 'No margin is asked for at this maturity.';
+    const { percent, absolute, maturity: at } = policy;
+    // Rows written before there were absolute margins come without the field.
+    if (!absolute) return `The policy asks for a margin of ${percent} % at ${at}.`;
+    const elsewhere = percent > 0 ? `, and of ${percent} % for limits in other units` : '';
+    return `The policy asks for a margin of ${absolute.text} ${prettyUnit(absolute.unit)}${elsewhere} at ${at}.`;
   });
   protected readonly isTemperature = computed(() => isTypedTemperature(this.typed().value));
   protected readonly understood = computed(() => understood(this.typed().value));
