@@ -15,6 +15,8 @@ const chosen = argumentsGiven.includes('--only')
   ? steps.filter(({ name }) => only.some((beginning) => name.startsWith(beginning)))
   : steps;
 
+const say = (/** @type {string} */ line) => console.log(line);
+
 for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM'])) {
   process.on(signal, async () => {
     await stopChildren();
@@ -26,8 +28,8 @@ async function main() {
   if (argumentsGiven.includes('--list')) return console.log(steps.map(({ name }) => name).join('\n'));
   if (chosen.length === 0)
     throw new Refusal(`No step begins with ${only.join(' or ')}. npm test -- --list names them all.`);
-  await setUp((line) => console.log(line));
-  const { passed, failed, seconds } = await runSteps(chosen, Math.min(2, cpus().length));
+  await setUp(say);
+  const { passed, failed, seconds } = await runSteps(chosen, Math.min(2, cpus().length), say);
   console.log(`\nTook ${Math.round(seconds)} s.\n${passed} passed, ${failed} failed`);
   process.exitCode = failed === 0 ? 0 : 1;
 }

@@ -1,4 +1,5 @@
 /** Runs steps in lanes, each as soon as what it waits for has passed, and adds up what they counted. */
+import { stripVTControlCharacters } from 'node:util';
 import { CommandFailed } from '../database/processes.mjs';
 
 /**
@@ -14,8 +15,8 @@ import { CommandFailed } from '../database/processes.mjs';
  * @property {() => Promise<Outcome>} run
  */
 
-/** @param {readonly Step[]} steps in order of preference @param {number} lanes */
-export async function runSteps(steps, lanes) {
+/** @param {readonly Step[]} steps in order of preference @param {number} lanes @param {(line: string) => void} say */
+export async function runSteps(steps, lanes, say) {
   const begin = performance.now();
   const waiting = [...steps];
   /** @type {Map<Step, Promise<void>>} */
@@ -32,7 +33,7 @@ export async function runSteps(steps, lanes) {
     waiting.splice(waiting.indexOf(step), 1);
     running.set(
       step,
-      runStep(step).then(({ passed, failed }) => {
+      runStep(step, say).then(({ passed, failed }) => {
         totals.passed += passed;
         totals.failed += failed;
         running.delete(step);
@@ -48,9 +49,9 @@ export async function runSteps(steps, lanes) {
   return totals;
 }
 
-/** @param {Step} step @returns {Promise<Outcome>} */
-async function runStep(step) {
-  console.log(`   ${step.name} …`);
+/** @param {Step} step @param {(line: string) => void} say @returns {Promise<Outcome>} */
+async function runStep(step, say) {
+  say(`   ${step.name} …`);
   const begin = performance.now();
   /** @type {Outcome} */
   let outcome;
@@ -62,8 +63,10 @@ async function runStep(step) {
   const time = `${((performance.now() - begin) / 1000).toFixed(1)} s`;
   const verdict = outcome.failed === 0 ? 'ok  ' : 'FAIL';
   if (outcome.failed > 0)
-    console.log(`\n──── ${step.name} ${'─'.repeat(Math.max(0, 70 - step.name.length))}\n${outcome.output.trimEnd()}`);
-  console.log(`${verdict} ${step.name}: ${outcome.passed} passed, ${outcome.failed} failed (${time})`);
+    say(
+      `\n──── ${step.name} ${'─'.repeat(Math.max(0, 70 - step.name.length))}\n${stripVTControlCharacters(outcome.output).trimEnd()}`,
+    );
+  say(`${verdict} ${step.name}: ${outcome.passed} passed, ${outcome.failed} failed (${time})`);
   return outcome;
 }
 
