@@ -1,6 +1,7 @@
 import 'reflect-metadata';
 import { createApp } from './app';
 import { firstAdministratorLink } from './features/people/first-administrator';
+import { ExpireDepartures } from './jobs/expire-departures';
 import { Person } from './models';
 import { readConfig } from './platform/config';
 import { Housekeeping } from './platform/housekeeping';
@@ -42,6 +43,8 @@ async function serve(services: Services): Promise<void> {
   const server = await listen(createApp(services), config);
   const housekeeping = new Housekeeping(services.sequelize, logger);
   housekeeping.start();
+  const departures = new ExpireDepartures(services);
+  departures.start();
   logger.info({ port: portOf(server), demonstration: config.demonstration }, 'listening');
   const link = await firstAdministratorLink(services);
   // On stdout and not in the log, which may be kept where others read it.
@@ -49,6 +52,7 @@ async function serve(services: Services): Promise<void> {
     process.stdout.write(`Nobody administers this product yet. Become the first here (works once):\n${link}\n`);
   logger.info({ signal: await told }, 'stopping');
   housekeeping.stop();
+  await departures.stop();
   services.streams.stop();
   await drain(server);
 }
