@@ -26,6 +26,11 @@ describe('toProblem', () => {
     expect(problem.fieldMessage('name')).toBeUndefined();
   });
 
+  it('does not say twice what would be right', () => {
+    const fields = [{ field: 'expires', message: 'nothing was given; give a day.', expected: 'give a day.' }];
+    expect(toProblem(answer(422, { fields })).fieldMessage('expires')).toBe('Nothing was given; give a day.');
+  });
+
   it('tells an unreachable server from a refusal, and survives a body that is no problem document', () => {
     expect(toProblem(answer(0, null)).code).toBe('unreachable');
     expect(toProblem(answer(502, '<html>Bad gateway</html>'))).toMatchObject({ code: 'http-502', fields: [] });

@@ -80,7 +80,9 @@ export function toProblem(error: unknown): ProblemError {
 export function fieldSentence(problem: FieldProblem): string {
   const fault = problem.message.replace(/\.$/, '');
   const sentence = `${fault.charAt(0).toUpperCase()}${fault.slice(1)}.`;
-  return problem.expected ? `${sentence} Right would be ${problem.expected.replace(/\.$/, '')}.` : sentence;
+  const expected = problem.expected?.replace(/\.$/, '') ?? '';
+  // Many refusals say already what would be right.
+  return expected === '' || fault.includes(expected) ? sentence : `${sentence} Right would be ${expected}.`;
 }
 
 function isRecord(value: unknown): value is Record<string, unknown> {

@@ -30,7 +30,7 @@ import { RequirementApi } from '../requirement-api';
 import { formOf } from './form-of';
 import { RequirementFields } from './requirement-fields';
 import { BLANK, type RequirementText, changesBetween, faultsOf, textOf } from './requirement-text';
-import { FIELD_NAMES, conflictFields, withTheirs } from './requirement-conflict';
+import { FIELD_NAMES, conflictFields, typedOver, withTheirs } from './requirement-conflict';
 
 /** Edits a requirement in preparation, or in the draft of a change request. What somebody else changes meanwhile is shown beside what was typed. */
 @Component({
@@ -246,6 +246,8 @@ export class EditRequirement {
 
   /** Shows both sides, and brings the choice into view: it stands above the fields. */
   private ask(theirs: Requirement): void {
+    const { text, before } = this.form.getRawValue();
+    this.form.patchValue({ text: typedOver(text, before, textOf(theirs)) });
     this.theirs.set(theirs);
     const host = this.host.nativeElement;
     afterNextRender(() => host.querySelector<HTMLElement>('dp-conflict-view input')?.focus(), {

@@ -46,3 +46,9 @@ export function withTheirs(
   const taken = (Object.keys(mine) as (keyof RequirementText)[]).filter((field) => chosen[field] === 'theirs');
   return { ...mine, ...Object.fromEntries(taken.map((field) => [field, theirs[field]])) };
 }
+
+/** What was typed over what stands: fields that were not touched take what somebody else has made of them. */
+export function typedOver(mine: RequirementText, before: RequirementText, theirs: RequirementText): RequirementText {
+  const untouched = (Object.keys(mine) as (keyof RequirementText)[]).filter((field) => mine[field] === before[field]);
+  return { ...mine, ...Object.fromEntries(untouched.map((field) => [field, theirs[field]])) };
+}
