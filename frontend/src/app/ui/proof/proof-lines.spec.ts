@@ -6,7 +6,7 @@ const line = (number: number, more: Partial<ProofLine> = {}): ProofLine => ({
   number,
   label: '',
   symbols: 'v_e = g_0\\,I_{sp}',
-  numbers: '= 9.80665 \\times 6500',
+  numbers: '9.80665 \\times 6500',
   result: { si: 63_743.2, unit: 'km/s' },
   failure: '',
   analysis: 'AN-014',

@@ -31,7 +31,7 @@ export interface Comparison {
               {{ line.label }}
             }
             @if (line.numbers) {
-              <dp-tex [tex]="line.numbers" />
+              <dp-tex [tex]="'{} = ' + line.numbers" />
             }
             @if (line.symbols && line.label) {
               <span class="faint small">{{ line.label }}</span>
