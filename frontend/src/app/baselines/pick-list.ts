@@ -7,6 +7,8 @@ export interface Candidate {
   readonly key: string;
   readonly title: string;
   readonly note: string;
+  /** True when it cannot be picked; the note then says why. */
+  readonly isBarred?: boolean;
 }
 
 /** A list to pick from, with all and none. */
@@ -21,7 +23,7 @@ export interface Candidate {
     }
     @if (candidates().length > 0) {
       <p class="small faint">
-        {{ count() }} of {{ candidates().length }} chosen
+        {{ count() }} of {{ open().length }} chosen
         <button type="button" class="quiet" (click)="all()">
           All<span class="only-heard">: {{ caption() }}</span>
         </button>
@@ -33,7 +35,12 @@ export interface Candidate {
         @for (candidate of candidates(); track candidate.id) {
           <li>
             <label class="choice">
-              <input type="checkbox" [checked]="picked().has(candidate.id)" (change)="toggle(candidate.id)" />
+              <input
+                type="checkbox"
+                [checked]="picked().has(candidate.id)"
+                [disabled]="candidate.isBarred ?? false"
+                (change)="toggle(candidate.id)"
+              />
               <span
                 ><span class="key">{{ candidate.key }}</span> {{ candidate.title }}
                 <span class="faint small">{{ candidate.note }}</span></span
@@ -56,6 +63,12 @@ export interface Candidate {
     }
     .rows {
       border-top: 1.5px solid var(--line);
+    }
+    @media (min-width: 1081px) {
+      .rows {
+        max-height: max(320px, calc(var(--sheet-height) - 210px));
+        overflow-y: auto;
+      }
     }
     li {
       padding: 2px 0;
@@ -83,10 +96,11 @@ export class PickList {
   readonly pickedChange = output<ReadonlySet<string>>();
 
   protected readonly nothing: ReadonlySet<string> = new Set();
+  protected readonly open = computed(() => this.candidates().filter(({ isBarred }) => isBarred !== true));
   protected readonly count = computed(() => this.candidates().filter(({ id }) => this.picked().has(id)).length);
 
   protected all(): void {
-    this.pickedChange.emit(new Set(this.candidates().map(({ id }) => id)));
+    this.pickedChange.emit(new Set(this.open().map(({ id }) => id)));
   }
 
   protected toggle(id: string): void {

@@ -1,4 +1,14 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, computed, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  ElementRef,
+  Injector,
+  afterNextRender,
+  computed,
+  inject,
+  signal,
+} from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
@@ -32,6 +42,8 @@ export class TakeBaseline {
   private readonly line = inject(ErrorLine);
   private readonly router = inject(Router);
   protected readonly context = inject(StudyContext);
+  private readonly injector = inject(Injector);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
   private readonly slot = `baseline.${this.context.study() ?? ''}`;
 
   protected readonly form = inject(NonNullableFormBuilder).group<BaselineWords>({
@@ -55,7 +67,10 @@ export class TakeBaseline {
       id,
       key,
       title,
-      note: toBeResolved ? `${state}, to be resolved` : state,
+      note: [state === 'in preparation' ? 'in preparation, to be submitted first' : state]
+        .concat(toBeResolved ? ['to be resolved'] : [])
+        .join(', '),
+      isBarred: state === 'in preparation',
     })),
   );
   protected readonly quantities = computed<readonly Candidate[]>(() =>
@@ -124,7 +139,8 @@ export class TakeBaseline {
     this.asked.set(true);
     this.problem.set(null);
     const { name, review, note, openItems } = this.form.getRawValue();
-    if (name.trim() === '' || review.trim() === '' || this.busy()) return;
+    if (this.busy()) return;
+    if (name.trim() === '' || review.trim() === '') return this.showProblem();
     this.busy.set(true);
     try {
       const answer = await firstValueFrom(
@@ -142,6 +158,7 @@ export class TakeBaseline {
       await this.leave();
     } catch (error) {
       this.problem.set(toProblem(error));
+      this.showProblem();
     } finally {
       this.busy.set(false);
     }
@@ -151,6 +168,13 @@ export class TakeBaseline {
     if (!this.mayTake()) return { disabled: true, reason: 'A baseline is taken by the board chair.' };
     if (this.baselines.value() === undefined || this.busy()) return { disabled: true };
     return {};
+  }
+
+  /** Brings what was refused into view, which may be far from the button. */
+  private showProblem(): void {
+    afterNextRender(() => this.host.querySelector('[role="alert"]')?.scrollIntoView({ block: 'center' }), {
+      injector: this.injector,
+    });
   }
 
   /** What was picked and is still a candidate. */

@@ -1,5 +1,5 @@
 import { BreakpointObserver } from '@angular/cdk/layout';
-import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input, signal } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { MatDialog } from '@angular/material/dialog';
 import type { ChangeSheet, EditSummary } from '@shared/contract';
@@ -114,6 +114,11 @@ export class ChangePage {
   });
 
   constructor() {
+    // A decided request has no draft any more to look from.
+    effect(() => {
+      const sheet = this.sheet.value();
+      if (sheet !== undefined && this.isDecided(sheet) && this.draft() === 'here') void this.context.lookFrom(NOW);
+    });
     inject(TitleBlock).register({
       name: () => this.key(),
       actions: () => {

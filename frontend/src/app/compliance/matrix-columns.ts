@@ -54,7 +54,7 @@ export function matrixColumns(numbers: MatrixNumbers, withStatements: boolean, s
       comparator: (_a, _b, a, b) => order(a.data?.limit?.value.si, b.data?.limit?.value.si),
     },
     {
-      ...words('assessed', 'Assessed ± U', 190, (row) => assessedText(row, numbers)),
+      ...words('assessed', 'Assessed ± U', 224, (row) => assessedText(row, numbers)),
       type: 'rightAligned',
       cellClass: 'mono ag-right-aligned-cell',
       comparator: (_a, _b, a, b) => order(a.data?.value?.si, b.data?.value?.si),
