@@ -25,10 +25,10 @@ export interface Candidate {
       <p class="small faint">
         {{ count() }} of {{ open().length }} chosen
         <button type="button" class="quiet" (click)="all()">
-          All<span class="only-heard">: {{ caption() }}</span>
+          All<span class="only-heard"> {{ caption() }}</span>
         </button>
         <button type="button" class="quiet" (click)="pickedChange.emit(nothing)">
-          None<span class="only-heard">: {{ caption() }}</span>
+          None<span class="only-heard"> {{ caption() }}</span>
         </button>
       </p>
       <ul class="rows" [attr.aria-label]="caption()">
