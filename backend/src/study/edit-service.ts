@@ -8,7 +8,7 @@ import {
   type Reproof,
   reprove,
   type RowFacts,
-  Study,
+  type Study,
   summaryOf,
   verdictRank,
 } from '@shared/study';

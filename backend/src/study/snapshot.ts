@@ -66,7 +66,7 @@ export async function readSnapshot(
   if (!row) return null;
   const snapshot = JSON.parse(row.content) as Snapshot;
   const study = new Study();
-  for (const kind of ENTITY_KINDS) for (const entity of snapshot.entities[kind] ?? []) study.put(kind, entity as never);
+  for (const kind of ENTITY_KINDS) for (const entity of snapshot.entities[kind] ?? []) study.put(kind, entity);
   const proven = new Map(snapshot.proven.map((one) => [one.requirementId, one]));
   return {
     proof: { study, model: modelOf(study), proven, uncertain: uncertainInputs(study) },

@@ -70,7 +70,7 @@ function sheet(
     query: At,
     handler: async (call) => {
       const context = await call.services.standpoints.context(call.study, call.person, call.query.at);
-      const found = await answer(context, call.params.key, call as unknown as ReadCall);
+      const found = await answer(context, call.params.key, call);
       if (found === null)
         throw new NotFound(`There is no ${call.params.key} in this study at ${context.standpoint.label}.`);
       return found;
