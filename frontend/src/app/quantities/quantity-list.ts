@@ -16,7 +16,8 @@ import { shownUncertainty, shownValue } from './quantity-text';
         <li [class.chosen]="row.key === selected()">
           <a [routerLink]="context.link('quantities', row.key)" [queryParams]="context.readParams()">
             <span class="what"
-              ><span class="key">{{ row.key }}</span> <span class="name">{{ row.name }}</span></span
+              ><span class="key">{{ row.key }}</span
+              >&ngsp;<span class="name">{{ row.name }}</span></span
             >
             <span class="number">{{ value(row) }}</span>
             <span class="small faint"

@@ -56,7 +56,7 @@ export const cylinderBuckling: Method = defineMethod({
   name: 'Buckling of a cylinder under outer pressure',
   summary: 'Outer pressure at which a short or long cylindrical section buckles.',
   equation:
-    'p_{cr} = \\begin{cases} 0.807\\,\\frac{E t^2}{l a}\\left[\\frac{(t/a)^2}{(1-\\nu^2)^3}\\right]^{1/4} & l < 4.9\\,a\\sqrt{a/t} \\\\ \\frac{E t^3}{4(1-\\nu^2)a^3} & \\text{else}\\end{cases}',
+    'p_{cr} = 0.807\\,\\frac{E t^2}{l a}\\left[\\frac{(t/a)^2}{(1-\\nu^2)^3}\\right]^{1/4}\\text{ where }l < 4.9\\,a\\sqrt{a/t},\\quad p_{cr} = \\frac{E t^3}{4(1-\\nu^2)a^3}\\text{ else}',
   inputs: { a: radius, l: length, t: thickness, E: modulus, nu: poisson },
   outputs: {
     l_c: { tex: 'l_c', label: 'length that separates short from long', unit: 'm' },

@@ -8,25 +8,15 @@ import {
   type Requirement,
   type Limit,
   type RequiredMargin,
-  type Verdict,
   type Verification,
 } from '@shared/contract';
 import { methodOf } from '../analysis-ports';
 import { definitionDigest } from '../apply/analyses';
 import { requiredInWords } from './comparison';
+import { READING_ORDER } from './reading-order';
 import { parentsOf } from './requirements-view';
 import { byKey, countVerdicts, provenOf, requirementsInForce, verdictView } from './verdict-view';
 import { personRef, type ViewContext } from './view-context';
-
-/** Bad news first: what fails, then what is not known, then what is thin. */
-const READING_ORDER: readonly Verdict[] = [
-  'non-compliant',
-  'not computable',
-  'no evidence',
-  'indeterminate',
-  'short margin',
-  'compliant',
-];
 
 export const CAUTION =
   'Concept-level estimate. It supports concept decisions and does not replace licensed engineering, range safety, radiation protection or local codes.';

@@ -1,5 +1,5 @@
 import type { Element, ElementRow, ProductTreeView, Requirement, Verdict } from '@shared/contract';
-import { worseVerdict } from '../verdict';
+import { firstToRead } from './reading-order';
 import { byKey, provenOf, requirementsInForce } from './verdict-view';
 import type { ViewContext } from './view-context';
 
@@ -43,10 +43,7 @@ export function productTreeView(context: ViewContext): ProductTreeView {
       depth,
       requirements,
       quantities: study.find('quantity', 'elementId', id).length,
-      worst: verdicts.reduce<Verdict | null>(
-        (worst, verdict) => (worst ? worseVerdict(worst, verdict) : verdict),
-        null,
-      ),
+      worst: verdicts.reduce<Verdict | null>((worst, verdict) => (worst ? firstToRead(worst, verdict) : verdict), null),
     };
     return [row, ...below.flat()];
   }

@@ -57,7 +57,7 @@ describe('the product tree', () => {
     );
     const { rows, unallocated } = productTreeView(viewOf(study));
     expect(rows.map(({ key, depth, worst, quantities }) => [key, depth, worst, quantities])).toEqual([
-      ['VEH', 0, 'no evidence', 1],
+      ['VEH', 0, 'non-compliant', 1],
       ['PRP', 1, 'no evidence', 2],
       ['RAD', 1, null, 0],
     ]);

@@ -7,6 +7,8 @@ import { VerdictMark } from '../../ui/verdict/verdict-mark';
 
 type Offer = AnalysisSheet['couldVerify'][number];
 const FIRST = 8;
+/** Margins beyond this many per cent compare things that merely share a dimension. */
+const FAR = 1000;
 
 /** What this analysis verifies, and which requirements an output of it could verify. */
 @Component({
@@ -83,6 +85,7 @@ export class CouldVerify {
   private words({ output: name, percent }: Offer): string {
     const line = this.sheet().lines.findIndex((one) => one.name === name);
     const takes = line < 0 ? `takes ${name}` : `takes line ${line + 1}, ${name}`;
+    if (percent !== null && Math.abs(percent) > FAR) return `${takes}, far off`;
     return percent === null ? takes : `${takes}, margin would be ${percentText(percent)}`;
   }
 }

@@ -67,20 +67,20 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
     },
   });
   const columns: ColDef<QuantityRow>[] = [
-    { ...words('key', 'Key', 92, (row) => row.key), pinned: 'left', cellRenderer: QuantityKeyCell },
-    { ...words('symbol', 'Symbol', 104, (row) => row.symbol), cellClass: 'mono' },
-    words('name', 'Name', 260, (row) => row.name),
+    { ...words('key', 'Key', 84, (row) => row.key), pinned: 'left', cellRenderer: QuantityKeyCell },
+    { ...words('symbol', 'Symbol', 92, (row) => row.symbol), cellClass: 'mono' },
+    words('name', 'Name', 250, (row) => row.name),
     {
-      ...edited('value', 'Value', 150, valueText, (row) => shownValue(row, context.show)),
+      ...edited('value', 'Value', 138, valueText, (row) => shownValue(row, context.show)),
       type: 'rightAligned',
-      cellClass: 'mono',
+      cellClass: 'mono ag-right-aligned-cell',
       comparator: (_a, _b, a, b) => order(a.data?.value?.si, b.data?.value?.si),
     },
     {
       ...edited(
         'uncertainty',
         'Uncertainty',
-        190,
+        182,
         (row) => uncertaintyText(row.uncertainty),
         (row) => shownUncertainty(row, context.show),
       ),
@@ -92,11 +92,11 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
       cellEditor: 'agSelectCellEditor',
       cellEditorParams: { values: [...BASES] },
     },
-    edited('source', 'Source', 220, (row) => row.source),
-    words('element', 'Element', 90, (row) => row.element),
     words('state', 'State', 104, (row) => row.state),
-    keys('usedBy', 'Used by', 170, 'analyses'),
     keys('bearsOn', 'Bears on', 330, 'requirements'),
+    words('element', 'Element', 90, (row) => row.element),
+    keys('usedBy', 'Used by', 170, 'analyses'),
+    edited('source', 'Source', 220, (row) => row.source),
     keys('changePending', 'Change pending', 140, 'changes'),
     words('owner', 'Owner', 150, (row) => row.owner.name),
   ];
