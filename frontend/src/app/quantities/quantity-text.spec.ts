@@ -46,6 +46,11 @@ describe('values and uncertainties as they are typed', () => {
     expect(!read.ok && read.message.length).toBeGreaterThan(10);
   });
 
+  it('says the unit that is missing with what was typed', () => {
+    const read = readValue(row, '6 700');
+    expect(!read.ok && read.message).toContain('“6 700 s”');
+  });
+
   it.each([
     ['50 s', { distribution: 'normal', k: 2 }],
     ['± 50 s, k = 1', { distribution: 'normal', k: 1 }],

@@ -1,4 +1,5 @@
 import type { QuantityRow, Uncertainty, UncertaintyInput } from '@shared/contract';
+import { prettyUnit } from '@shared/units';
 import { readTyped } from '../ui/measure/quantity-field';
 import type { ShowNumber } from '../ui/measure/show-number';
 
@@ -43,8 +44,14 @@ export function shownUncertainty(row: QuantityRow, show: ShowNumber): string {
 export function readValue(row: Pick<QuantityRow, 'unit' | 'temperature'>, typed: string): Reading<Typed | null> {
   if (typed.trim() === '') return { ok: true, value: null };
   const result = readTyped(typed, row.unit, row.temperature);
-  if (!result.ok) return { ok: false, message: result.message };
+  if (!result.ok)
+    return { ok: false, message: result.code === 'no-unit' ? unitMissing(typed, row.unit) : result.message };
   return { ok: true, value: { text: result.measure.text, unit: result.measure.unit } };
+}
+
+/** What is missing is said with the unit of the quantity itself. */
+function unitMissing(typed: string, unit: string): string {
+  return `“${typed.trim()}” has no unit. Right would be “${typed.trim()} ${prettyUnit(unit)}”, or any other unit of the same dimension.`;
 }
 
 /** Digits and unit, as commands take them. */

@@ -69,6 +69,11 @@ import { refusalAt } from './refusals';
       }
     }
   `,
+  styles: `
+    .caption {
+      margin-bottom: 8px;
+    }
+  `,
 })
 export class AboutPart {
   protected readonly editor = inject(AnalysisEditor);

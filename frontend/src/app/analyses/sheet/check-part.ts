@@ -65,6 +65,9 @@ import { RouterLink } from '@angular/router';
     :host {
       display: block;
     }
+    h2 {
+      margin-bottom: 8px;
+    }
     h2:not(:first-child) {
       margin-top: 28px;
     }

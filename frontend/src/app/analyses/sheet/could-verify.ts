@@ -56,6 +56,9 @@ const FAR = 1000;
     :host {
       display: block;
     }
+    .caption {
+      margin-bottom: 8px;
+    }
     .could {
       margin-top: 24px;
     }

@@ -11,7 +11,7 @@ export interface KeysParams {
   readonly section: 'analyses' | 'requirements' | 'changes';
 }
 
-const SHOWN = 4;
+const SHOWN = 3;
 
 /** The key of a quantity, leading to its sheet. */
 @Component({

@@ -36,7 +36,7 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
     cellRenderer: KeysCell,
     cellRendererParams: { section },
     comparator: (a: readonly string[], b: readonly string[]) => a.length - b.length,
-    tooltipValueGetter: ({ data }) => ((data?.[colId].length ?? 0) > 4 ? data?.[colId].join(', ') : undefined),
+    tooltipValueGetter: ({ data }) => ((data?.[colId].length ?? 0) > 3 ? data?.[colId].join(', ') : undefined),
   });
   const edited = (
     field: EditedField,
@@ -69,9 +69,9 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
   const columns: ColDef<QuantityRow>[] = [
     { ...words('key', 'Key', 84, (row) => row.key), pinned: 'left', cellRenderer: QuantityKeyCell },
     { ...words('symbol', 'Symbol', 92, (row) => row.symbol), cellClass: 'mono' },
-    words('name', 'Name', 250, (row) => row.name),
+    words('name', 'Name', 240, (row) => row.name),
     {
-      ...edited('value', 'Value', 138, valueText, (row) => shownValue(row, context.show)),
+      ...edited('value', 'Value', 152, valueText, (row) => shownValue(row, context.show)),
       type: 'rightAligned',
       cellClass: 'mono ag-right-aligned-cell',
       comparator: (_a, _b, a, b) => order(a.data?.value?.si, b.data?.value?.si),
@@ -80,7 +80,7 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
       ...edited(
         'uncertainty',
         'Uncertainty',
-        182,
+        200,
         (row) => uncertaintyText(row.uncertainty),
         (row) => shownUncertainty(row, context.show),
       ),
@@ -93,7 +93,7 @@ export function quantityColumns(context: QuantityColumnsContext, sort: string): 
       cellEditorParams: { values: [...BASES] },
     },
     words('state', 'State', 104, (row) => row.state),
-    keys('bearsOn', 'Bears on', 330, 'requirements'),
+    keys('bearsOn', 'Bears on', 290, 'requirements'),
     words('element', 'Element', 90, (row) => row.element),
     keys('usedBy', 'Used by', 170, 'analyses'),
     edited('source', 'Source', 220, (row) => row.source),
