@@ -1,12 +1,4 @@
-import {
-  ChangeDetectionStrategy,
-  Component,
-  ElementRef,
-  Injector,
-  afterNextRender,
-  computed,
-  inject,
-} from '@angular/core';
+import { ChangeDetectionStrategy, ChangeDetectorRef, Component, ElementRef, computed, inject } from '@angular/core';
 import { UnitPreferences } from '../../core/preferences/unit-preferences';
 import { Tex } from '../../ui/proof/tex';
 import type { CheckedLine } from '../text/check-lines';
@@ -27,7 +19,7 @@ const OFFERED = 3;
 export class LinesPart {
   private readonly units = inject(UnitPreferences);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
-  private readonly injector = inject(Injector);
+  private readonly changes = inject(ChangeDetectorRef);
   protected readonly editor = inject(AnalysisEditor);
 
   protected readonly rows = computed(() => {
@@ -106,9 +98,9 @@ export class LinesPart {
   }
 
   private focus(id: number): void {
-    afterNextRender(() => this.host.querySelector<HTMLElement>(`[data-line="${id}"]`)?.focus(), {
-      injector: this.injector,
-    });
+    // At once, so that what is typed next goes into the line that was just added.
+    this.changes.detectChanges();
+    this.host.querySelector<HTMLElement>(`[data-line="${id}"]`)?.focus();
   }
 }
 
